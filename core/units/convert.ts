@@ -1,0 +1,24 @@
+import type { Unit } from './unit.ts';
+
+/**
+ * SI value of a number in a unit. A gauge pressure needs the atmosphere, which the caller must have checked.
+ *
+ * @param number     in `unit`
+ * @param unit       of the table or compound
+ * @param atmosphere absolute, Pa; only gauge units use it
+ * @returns SI value: absolute Pa for pressure levels, K for temperature levels
+ */
+export function toSi(number: number, unit: Unit, atmosphere: number | undefined): number {
+  return number * unit.factor + unit.shift + gaugeShift(unit, atmosphere);
+}
+
+/** The number that a SI value has in a unit: the inverse of {@link toSi}. */
+export function fromSi(si: number, unit: Unit, atmosphere: number | undefined): number {
+  return (si - unit.shift - gaugeShift(unit, atmosphere)) / unit.factor;
+}
+
+function gaugeShift(unit: Unit, atmosphere: number | undefined): number {
+  if (!unit.gauge) return 0;
+  if (atmosphere === undefined) throw new Error(`no atmosphere for the gauge unit ${unit.text}`);
+  return atmosphere;
+}

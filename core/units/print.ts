@@ -1,0 +1,58 @@
+import { fromSi } from './convert.ts';
+import type { Printed } from './printed.ts';
+import type { Unit } from './unit.ts';
+
+/** Significant digits of a result, where the engineer asks for no other number. */
+export const DEFAULT_DIGITS = 4;
+
+/** Between these magnitudes a number is written out; beyond them with a power of ten. */
+const SMALLEST = 1e-4;
+const LARGEST = 1e7;
+
+export interface PrintOptions {
+  /** Significant digits, 1 to 15. */
+  readonly digits?: number;
+  /** Absolute, Pa; for gauge units. */
+  readonly atmosphere?: number;
+}
+
+/** Prints a SI value in a unit at its significant digits; digits before the decimal sign are never rounded away. */
+export function printQuantity(si: number, unit: Unit, options: PrintOptions = {}): Printed {
+  const number = fromSi(si, unit, options.atmosphere);
+  return printed(printNumber(number, options.digits ?? DEFAULT_DIGITS), unit);
+}
+
+/** Prints a number just as it was typed. */
+export function printTyped(numberText: string, unit: Unit): Printed {
+  return printed(numberText.replaceAll('−', '-'), unit);
+}
+
+/** A number at significant digits: `26.07`, `574.9`, `12345`, `1.05e-6`. */
+export function printNumber(number: number, digits: number = DEFAULT_DIGITS): string {
+  const magnitude = Math.abs(number);
+  if (magnitude === 0) return '0';
+  if (magnitude < SMALLEST || magnitude >= LARGEST) return withPower(number, digits);
+  const exponent = Number(magnitude.toExponential(digits - 1).split('e')[1]);
+  return number.toFixed(Math.max(0, digits - 1 - exponent));
+}
+
+function withPower(number: number, digits: number): string {
+  const [mantissa = '', exponent = '0'] = number.toExponential(digits - 1).split('e');
+  return `${mantissa}e${Number(exponent)}`;
+}
+
+function printed(number: string, unit: Unit): Printed {
+  return { number, unit: unit.text === '1' ? '' : unit.text, tex: numberTex(number) + unitTex(unit) };
+}
+
+/** `1.05e-6` → `1.05\times 10^{-6}`; fractions and feet-inches are set as typed. */
+function numberTex(number: string): string {
+  const match = /^(-?[\d.]+)e([+-]?\d+)$/i.exec(number);
+  if (match !== null) return `${match[1]}\\times 10^{${Number(match[2])}}`;
+  return /[^\d.-]/.test(number) ? `\\text{${number}}` : number;
+}
+
+function unitTex(unit: Unit): string {
+  if (unit.text === '1') return '';
+  return unit.text === 'deg' ? unit.tex : `\\,${unit.tex}`;
+}
