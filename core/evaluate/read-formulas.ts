@@ -1,0 +1,63 @@
+import { error, type Diagnosed, type Diagnostic } from '../diagnostics/diagnostic.ts';
+import { parseComparison, parseFormula } from '../expression/parse-formula.ts';
+import type { Comparison, Formula } from '../expression/tree.ts';
+import { unknownUnit } from '../expression/unknown-unit.ts';
+import type { CheckNode, SheetDocument, StepNode, Text } from '../sheet/document.ts';
+import { parseUnit } from '../units/parse-unit.ts';
+
+/** A step with its formula read. The unit that the engineer wants, by `to` or by `unit:`, stands in the formula. */
+export interface ReadStep {
+  readonly node: StepNode;
+  readonly formula: Formula;
+}
+
+export interface ReadFormulas {
+  /** By name. A step whose formula cannot be read is left out. */
+  readonly steps: ReadonlyMap<string, ReadStep>;
+  readonly checks: ReadonlyMap<CheckNode, Comparison>;
+  readonly diagnostics: readonly Diagnostic[];
+}
+
+/** Reads the formulas of all steps and checks; nothing is typed or evaluated yet. */
+export function readFormulas(document: SheetDocument): ReadFormulas {
+  const steps = new Map<string, ReadStep>();
+  const checks = new Map<CheckNode, Comparison>();
+  const diagnostics: Diagnostic[] = [];
+  for (const section of document.sections) {
+    for (const node of section.steps) {
+      const read = readStep(node);
+      diagnostics.push(...read.diagnostics);
+      if (read.step !== null) steps.set(node.name.text, read.step);
+    }
+    for (const node of section.checks) {
+      const { value, diagnostics: found } = parseComparison(node.that.text, node.that.span);
+      diagnostics.push(...found);
+      if (value !== undefined) checks.set(node, value);
+    }
+  }
+  return { steps, checks, diagnostics };
+}
+
+function readStep(node: StepNode): { step: ReadStep | null; diagnostics: readonly Diagnostic[] } {
+  const { value: formula, diagnostics } = parseFormula(node.calc.text, node.calc.span);
+  const wanted = node.unit === undefined ? undefined : readUnit(node.unit, formula);
+  const all = [...diagnostics, ...(wanted?.diagnostics ?? [])];
+  if (formula === undefined) return { step: null, diagnostics: all };
+  return {
+    step: { node, formula: wanted?.value === undefined ? formula : { ...formula, to: wanted.value } },
+    diagnostics: all,
+  };
+}
+
+function readUnit({ text, span }: Text, formula: Formula | undefined): Diagnosed<NonNullable<Formula['to']>> {
+  const unit = parseUnit(text);
+  if (unit === null) return { diagnostics: [unknownUnit(text, span)] };
+  const inFormula = formula?.to?.unit.text;
+  if (inFormula !== undefined && inFormula !== unit.text) {
+    const message = `the result is wanted both in \`${unit.text}\` and in \`${inFormula}\``;
+    return {
+      diagnostics: [error('SCHEMA_VALUE', span, message, { hints: ['keep one: `unit:`, or `to` in the formula'] })],
+    };
+  }
+  return { value: { unit, span }, diagnostics: [] };
+}
