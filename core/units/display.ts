@@ -101,7 +101,9 @@ export function inSystem(unit: Unit, system: System): Unit {
   if (unit.system === 'both' || unit.system === system) return unit;
   const [from, to] = system === 'si' ? ([0, 1] as const) : ([1, 0] as const);
   const pair = COUNTERPARTS.find((names) => names[from] === unit.text);
-  return pair === undefined ? displayUnit({ dimension: unit.dimension, kind: unit.kind }, system) : known(pair[to]);
+  if (pair !== undefined) return known(pair[to]);
+  if (unit.gauge) return known(system === 'us' ? 'psig' : 'barg');
+  return displayUnit({ dimension: unit.dimension, kind: unit.kind }, system);
 }
 
 const ABSOLUTE: ReadonlyMap<string, string> = new Map([

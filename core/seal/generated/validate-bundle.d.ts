@@ -1,4 +1,4 @@
-// Made from the JSON Schemas by .build/schemas.ts; do not edit. 51a1b9fa4be93fbe14142d1a18e6e261647a6207bcd0aabfbec4a3aad58400d3
+// Made from the JSON Schemas by .build/schemas.ts; do not edit. 9014203406e68be70be4d3a5af44c2e87c119147a2b6ba279bd4d7546d0edc53
 import type { ErrorObject } from 'ajv';
 import type { Bundle } from '../model.ts';
 

@@ -1,0 +1,26 @@
+import { renderDiagnostic } from '../../core/diagnostics/render.ts';
+import type { LocatedDiagnostic } from '../../core/report/model.ts';
+import type { Paint } from '../terminal.ts';
+
+/** All diagnostics in the human form, and one line that counts them; empty when there are none. */
+export function diagnosticsText(diagnostics: readonly LocatedDiagnostic[], paint: Paint): string {
+  if (diagnostics.length === 0) return '';
+  const painter = {
+    error: (text: string) => paint(['red', 'bold'], text),
+    warning: (text: string) => paint(['yellow', 'bold'], text),
+    info: (text: string) => paint(['blue', 'bold'], text),
+    dim: (text: string) => paint('dim', text),
+  };
+  const rendered = diagnostics.map((diagnostic) => renderDiagnostic(diagnostic, painter));
+  return `${[...rendered, countLine(diagnostics)].join('\n\n')}\n`;
+}
+
+export function countLine(diagnostics: readonly LocatedDiagnostic[]): string {
+  const of = (severity: LocatedDiagnostic['severity']): number =>
+    diagnostics.filter((diagnostic) => diagnostic.severity === severity).length;
+  return [count(of('error'), 'error'), count(of('warning'), 'warning')].join(', ');
+}
+
+export function count(n: number, noun: string): string {
+  return `${n} ${noun}${n === 1 ? '' : 's'}`;
+}

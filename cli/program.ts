@@ -1,0 +1,228 @@
+import { Command, CommanderError, Option } from 'commander';
+import { CORE_VERSION } from '../core/version.ts';
+import { CommandFailure, EXIT, type ExitStatus } from './exit-status.ts';
+import { paintFor, type Paint, type Surroundings } from './terminal.ts';
+
+/** What every command is given besides its own arguments. */
+export interface Invocation extends Surroundings {
+  readonly paintOut: Paint;
+  readonly paintErr: Paint;
+}
+
+type Run = (invocation: Invocation) => Promise<ExitStatus>;
+
+/**
+ * Runs one command line and gives its exit status. Commands are loaded only when they are called, so that the program
+ * starts at once.
+ */
+export async function runCli(args: readonly string[], surroundings: Surroundings): Promise<ExitStatus> {
+  let status: ExitStatus = EXIT.done;
+  const invocation = (): Invocation => {
+    const colour = !args.includes('--no-color');
+    const { streams, env } = surroundings;
+    return {
+      ...surroundings,
+      paintOut: paintFor(streams.outIsTerminal, env, colour),
+      paintErr: paintFor(streams.errIsTerminal, env, colour),
+    };
+  };
+  const program = buildProgram(surroundings, async (run) => {
+    status = await run(invocation());
+  });
+  try {
+    await program.parseAsync(args, { from: 'user' });
+    return status;
+  } catch (cause) {
+    return explainFailure(cause, invocation());
+  }
+}
+
+function explainFailure(cause: unknown, { streams, paintErr, env }: Invocation): ExitStatus {
+  if (cause instanceof CommanderError) return cause.exitCode === 0 ? EXIT.done : EXIT.usage;
+  if (cause instanceof CommandFailure) {
+    streams.err(`${paintErr(['red', 'bold'], 'error')}: ${cause.message}\n`);
+    for (const hint of cause.hints) streams.err(`  = hint: ${hint}\n`);
+    return cause.status;
+  }
+  streams.err(`${paintErr(['red', 'bold'], 'error')}: this is a fault of Antinode, not of your sheet; please report it\n`);
+  const detail = cause instanceof Error ? cause : new Error(String(cause));
+  streams.err(`  ${env['ANTINODE_DEBUG'] === undefined ? detail.message : (detail.stack ?? detail.message)}\n`);
+  return EXIT.bug;
+}
+
+type Execute = (run: Run) => Promise<void>;
+
+function buildProgram({ streams }: Surroundings, execute: Execute): Command {
+  const program = new Command('antinode')
+    .description('Calculation notebook for reciprocating-compressor packages.')
+    .version(CORE_VERSION)
+    .option('--no-color', 'write without colour')
+    .showSuggestionAfterError()
+    .exitOverride()
+    .configureOutput({ writeOut: streams.out, writeErr: streams.err })
+    .addHelpText('before', EXAMPLES)
+    .addHelpText('after', STATUSES);
+  sheetCommands(program, execute);
+  catalogueCommands(program, execute);
+  serverCommands(program, execute);
+  for (const command of program.commands) inherit(command, program);
+  return program;
+}
+
+/** Commander hands its settings to subcommands only where they are made by `command()` after the settings. */
+function inherit(command: Command, parent: Command): void {
+  command.copyInheritedSettings(parent);
+  for (const child of command.commands) inherit(child, command);
+}
+
+const EXAMPLES = `Examples:
+  antinode new study compressor-study       a study folder with a sheet that runs
+  antinode run sheet.yaml                   evaluate a sheet and print its report
+  antinode run sheet.yaml --set p_d=915psig --units si
+  antinode functions speed_of_sound         what a function takes, gives, and rests on
+`;
+
+const STATUSES = `
+Exit status: 0 done and every check passes, 1 some check fails, 2 the sheet is wrong, 3 wrong usage,
+4 the server refused or is out of reach.`;
+
+const jsonFormat = (): Option => new Option('--format <format>', 'form of the answer').choices(['text', 'json']).default('text');
+
+function sheetCommands(program: Command, execute: Execute): void {
+  const create = program.command('new').description('write a commented starting point that runs');
+  create
+    .command('study')
+    .argument('<dir>', 'folder to make')
+    .description('a study folder with a first sheet')
+    .addHelpText('before', 'Example:\n  antinode new study compressor-study\n')
+    .action((dir: string) => execute(async (at) => (await import('./commands/new.ts')).newStudy(dir, at)));
+  create
+    .command('sheet')
+    .argument('<file>', 'file to write')
+    .description('a sheet')
+    .addHelpText('before', 'Example:\n  antinode new sheet lateral-force.yaml\n')
+    .action((file: string) => execute(async (at) => (await import('./commands/new.ts')).newSheet(file, at)));
+
+  program
+    .command('lint')
+    .argument('<file...>', 'sheets to check; - reads standard input')
+    .description('diagnostics only')
+    .addOption(jsonFormat())
+    .option('--strict', 'warnings make the exit status 2')
+    .addHelpText('before', 'Examples:\n  antinode lint sheet.yaml\n  antinode lint *.yaml --format json\n')
+    .action((files: string[], options: { format: 'text' | 'json'; strict?: true }) =>
+      execute(async (at) => (await import('./commands/lint.ts')).lint(files, options, at)),
+    );
+
+  program
+    .command('run')
+    .argument('<file>', 'sheet to evaluate; - reads standard input')
+    .description('evaluate a sheet')
+    .option('--set <name=value>', 'another value for an input; may be given again', collect, [])
+    .addOption(new Option('--units <system>', 'show all results in this system').choices(['us', 'si']))
+    .addOption(new Option('--format <format>', 'form of the report').choices(['text', 'json', 'html']).default('text'))
+    .option('--out <file>', 'write the report to a file')
+    .option('--strict', 'warnings make the exit status 2')
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode run sheet.yaml\n  antinode run sheet.yaml --format html --out report.html\n  antinode run sheet.yaml --set p_d=915psig --units si\n',
+    )
+    .action((file: string, options: RunOptions) =>
+      execute(async (at) => (await import('./commands/run.ts')).run(file, options, at)),
+    );
+
+  program
+    .command('verify')
+    .argument('<bundle>', 'bundle file of an approved revision')
+    .option('--key <id>', 'id of the server key that you trust')
+    .description('check signatures, digests and log proof, and evaluate again, offline')
+    .addOption(jsonFormat())
+    .addHelpText('before', 'Example:\n  antinode verify TH3-C-104-B.bundle.json\n')
+    .addHelpText('after', '\nExit status: 0 the bundle holds, 1 it is refused, 2 it is no bundle.')
+    .action((bundle: string, options: { key?: string; format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/verify.ts')).verify(bundle, options, at)),
+    );
+}
+
+export interface RunOptions {
+  readonly set: readonly string[];
+  readonly units?: 'us' | 'si';
+  readonly format: 'text' | 'json' | 'html';
+  readonly out?: string;
+  readonly strict?: true;
+}
+
+function collect(value: string, previous: readonly string[]): string[] {
+  return [...previous, value];
+}
+
+function catalogueCommands(program: Command, execute: Execute): void {
+  program
+    .command('functions')
+    .argument('[name]', 'one function')
+    .description('the functions that sheets may call')
+    .addOption(jsonFormat())
+    .addHelpText('before', 'Examples:\n  antinode functions\n  antinode functions pipe_bore\n')
+    .action((name: string | undefined, options: { format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/functions.ts')).functions(name, options, at)),
+    );
+  program
+    .command('units')
+    .argument('[text...]', 'a unit or a value')
+    .description('the units that sheets may use, or what a value is in other units')
+    .addOption(jsonFormat())
+    .addHelpText('before', 'Examples:\n  antinode units\n  antinode units 905 psia\n')
+    .action((text: string[], options: { format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/units.ts')).units(text.join(' '), options, at)),
+    );
+}
+
+function serverCommands(program: Command, execute: Execute): void {
+  program
+    .command('login')
+    .argument('[server]', 'address of the team server')
+    .description('sign in; you approve it in the browser')
+    .addHelpText('before', 'Example:\n  antinode login http://127.0.0.1:5181\n')
+    .action((server: string | undefined) => execute(async (at) => (await import('./commands/login.ts')).login(server, at)));
+  program
+    .command('logout')
+    .description('forget the sign-in')
+    .action(() => execute(async (at) => (await import('./commands/logout.ts')).logout(at)));
+  program
+    .command('whoami')
+    .description('who is signed in, and where')
+    .addOption(jsonFormat())
+    .action((options: { format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/whoami.ts')).whoami(options, at)),
+    );
+  program
+    .command('push')
+    .argument('<file>', 'sheet to push')
+    .option('--study <study>', 'study to push to; needed where you are an engineer of several')
+    .description('evaluate a sheet and push it to the team server as a new revision')
+    .addOption(jsonFormat())
+    .addHelpText('before', 'Example:\n  antinode push sheet.yaml --study th-3\n')
+    .action((file: string, options: { study?: string; format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/push.ts')).push(file, options, at)),
+    );
+  program
+    .command('status')
+    .argument('[study]', 'one study')
+    .description('revisions on the team server, and what they wait for')
+    .addOption(jsonFormat())
+    .addHelpText('before', 'Example:\n  antinode status th-3\n')
+    .action((study: string | undefined, options: { format: 'text' | 'json' }) =>
+      execute(async (at) => (await import('./commands/status.ts')).status(study, options, at)),
+    );
+  program
+    .command('serve')
+    .option('--data <dir>', 'folder of the data')
+    .option('--port <port>', 'port to listen on')
+    .option('--host <host>', 'address to listen on')
+    .option('--demo', 'seed the demo study, and show its sign-ins')
+    .description('run the team server')
+    .addHelpText('before', 'Examples:\n  antinode serve --demo\n  antinode serve --data /srv/antinode --port 8080\n')
+    .action((options: { data?: string; port?: string; host?: string; demo?: true }) =>
+      execute(async (at) => (await import('./commands/serve.ts')).serve(options, at)),
+    );
+}

@@ -1,0 +1,13 @@
+import { useSyncExternalStore } from 'react';
+
+/** Whether a media query holds, followed as the window changes. */
+export function useMedia(query: string): boolean {
+  return useSyncExternalStore(
+    (onChange) => {
+      const list = window.matchMedia(query);
+      list.addEventListener('change', onChange);
+      return () => list.removeEventListener('change', onChange);
+    },
+    () => window.matchMedia(query).matches,
+  );
+}

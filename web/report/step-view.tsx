@@ -1,0 +1,48 @@
+import { memo } from 'react';
+import type { StepBlock } from '../../core/report/model.ts';
+import { Frame } from './frame.tsx';
+import type { BlockProps } from './shared.ts';
+import { Tex } from './tex.tsx';
+import { Trace } from './trace.tsx';
+
+/** An equals sign after which no line breaks: a link is broken before it. */
+const EQUALS = '{=}\\;';
+
+/** A step: what it is and where it comes from, then symbol = formula = numbers = result. */
+export const StepView = memo(function StepView({ block, isCurrent, shared }: BlockProps<StepBlock>) {
+  const source = stepSource(block);
+  return (
+    <Frame block={block} isCurrent={isCurrent} shared={shared} className="an-step">
+      <div className="an-step-head">
+        <span className="an-label">{block.label}</span>
+        {source !== '' && <span className="an-source">{source}</span>}
+      </div>
+      <StepLine block={block} />
+      {block.note !== undefined && <p className="an-note">{block.note}</p>}
+      <Trace block={block} blocks={shared.blocks} />
+    </Frame>
+  );
+});
+
+/**
+ * The chain of equals signs. Each link is set by itself, so that a narrow page breaks before an equals sign and the
+ * parts can differ in ink; links that would only repeat their neighbour are left out.
+ */
+function StepLine({ block }: { readonly block: StepBlock }) {
+  const { symbol, formula, substituted, printed } = block;
+  return (
+    <div className="an-equation">
+      <Tex tex={`\\displaystyle ${symbol} = ${formula}`} className="an-link" />
+      {substituted !== formula && substituted !== printed.tex && (
+        <Tex tex={`\\displaystyle ${EQUALS}${substituted}`} className="an-link an-substituted" />
+      )}
+      {formula !== printed.tex && <Tex tex={`${EQUALS}${printed.tex}`} className="an-link an-result" />}
+    </div>
+  );
+}
+
+/** The engineer's own source before those of the methods that the formula calls. */
+function stepSource(block: StepBlock): string {
+  if (block.source !== undefined) return block.source;
+  return [...new Set(block.methods.map((method) => method.source))].join('; ');
+}
