@@ -44,7 +44,9 @@ function explainFailure(cause: unknown, { streams, paintErr, env }: Invocation):
     for (const hint of cause.hints) streams.err(`  = hint: ${hint}\n`);
     return cause.status;
   }
-  streams.err(`${paintErr(['red', 'bold'], 'error')}: this is a fault of Antinode, not of your sheet; please report it\n`);
+  streams.err(
+    `${paintErr(['red', 'bold'], 'error')}: this is a fault of Antinode, not of your sheet; please report it\n`,
+  );
   const detail = cause instanceof Error ? cause : new Error(String(cause));
   streams.err(`  ${env['ANTINODE_DEBUG'] === undefined ? detail.message : (detail.stack ?? detail.message)}\n`);
   return EXIT.bug;
@@ -86,7 +88,8 @@ const STATUSES = `
 Exit status: 0 done and every check passes, 1 some check fails, 2 the sheet is wrong, 3 wrong usage,
 4 the server refused or is out of reach.`;
 
-const jsonFormat = (): Option => new Option('--format <format>', 'form of the answer').choices(['text', 'json']).default('text');
+const jsonFormat = (): Option =>
+  new Option('--format <format>', 'form of the answer').choices(['text', 'json']).default('text');
 
 function sheetCommands(program: Command, execute: Execute): void {
   const create = program.command('new').description('write a commented starting point that runs');
@@ -183,7 +186,9 @@ function serverCommands(program: Command, execute: Execute): void {
     .argument('[server]', 'address of the team server')
     .description('sign in; you approve it in the browser')
     .addHelpText('before', 'Example:\n  antinode login http://127.0.0.1:5181\n')
-    .action((server: string | undefined) => execute(async (at) => (await import('./commands/login.ts')).login(server, at)));
+    .action((server: string | undefined) =>
+      execute(async (at) => (await import('./commands/login.ts')).login(server, at)),
+    );
   program
     .command('logout')
     .description('forget the sign-in')

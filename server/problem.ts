@@ -7,7 +7,7 @@ const REFUSALS = {
   'bad-body': [400, 'The body of the request is not what it should be'],
   'not-signed-in': [401, 'You are not signed in'],
   'wrong-password': [403, 'The e-mail or the password is wrong'],
-  'csrf': [403, 'The request does not come from this page'],
+  csrf: [403, 'The request does not come from this page'],
   'wrong-role': [403, 'Your roles in the study do not allow it'],
   'same-person': [403, 'Author, checker and approver must be three people'],
   'needs-browser': [403, 'This is done in the browser'],
@@ -16,7 +16,7 @@ const REFUSALS = {
   'holds-open': [409, 'Holds are open'],
   'blocks-unmarked': [409, 'Blocks are not marked'],
   'must-fix-open': [409, 'Must-fix remarks are not resolved'],
-  'unchanged': [409, 'Nothing has changed'],
+  unchanged: [409, 'Nothing has changed'],
   'digest-differs': [409, 'The block has another digest'],
   'not-approved': [409, 'The revision is not approved'],
   'changed-meanwhile': [412, 'It was changed meanwhile'],
@@ -33,8 +33,8 @@ const REFUSALS = {
   'precondition-required': [428, 'The request must say which version it changes'],
   'locked-out': [429, 'Too many failed attempts'],
   'too-many-requests': [429, 'Too many requests'],
-  'internal': [500, 'Something went wrong in the server'],
-  'busy': [503, 'The server is busy'],
+  internal: [500, 'Something went wrong in the server'],
+  busy: [503, 'The server is busy'],
 } as const satisfies Readonly<Record<string, readonly [status: number, title: string]>>;
 
 export type RefusalCode = keyof typeof REFUSALS;

@@ -24,7 +24,9 @@ function catalogue(format: 'text' | 'json'): string {
   const listed = topics.map((topic) =>
     [
       topic,
-      ...[...LIBRARY.values()].filter((fn) => fn.topic === topic).map((fn) => `  ${head(fn).padEnd(width)}  ${fn.summary}`),
+      ...[...LIBRARY.values()]
+        .filter((fn) => fn.topic === topic)
+        .map((fn) => `  ${head(fn).padEnd(width)}  ${fn.summary}`),
     ].join('\n'),
   );
   const mathematics = `mathematics\n  ${[...MATHEMATICS.keys()].join(' ')}\n  constants: ${[...CONSTANTS.keys()].join(' ')}`;
@@ -35,7 +37,8 @@ function one(name: string, format: 'text' | 'json', at: Invocation): string {
   const fn = LIBRARY.get(name);
   if (fn !== undefined) return format === 'json' ? json(asData(fn)) : described(fn, at);
   const mathematics = MATHEMATICS.get(name);
-  if (mathematics !== undefined) return format === 'json' ? json({ name, summary: mathematics.summary }) : `${name}: ${mathematics.summary}\n`;
+  if (mathematics !== undefined)
+    return format === 'json' ? json({ name, summary: mathematics.summary }) : `${name}: ${mathematics.summary}\n`;
   const near = nearest(name, [...LIBRARY.keys(), ...MATHEMATICS.keys()], 3);
   throw new CommandFailure(EXIT.usage, `there is no function \`${name}\``, [
     near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : '`antinode functions` lists all',
@@ -49,7 +52,10 @@ function described(fn: LibraryFunction, { paintOut }: Invocation): string {
     `  ${fn.summary}`,
     '',
     `  formula   ${fn.formula}`,
-    ...fn.parameters.map((parameter, i) => `  ${i === 0 ? 'takes   ' : '        '}  ${parameter.name.padEnd(width)}  ${parameterText(parameter)}`),
+    ...fn.parameters.map(
+      (parameter, i) =>
+        `  ${i === 0 ? 'takes   ' : '        '}  ${parameter.name.padEnd(width)}  ${parameterText(parameter)}`,
+    ),
     `  gives     ${fn.returns.summary}${fn.returns.unit === '1' ? '' : `, in ${fn.returns.unit}`}`,
     `  valid     ${fn.validity}`,
     `  source    ${fn.source}`,
@@ -68,7 +74,9 @@ function parameterText({ summary, kind, range }: Parameter): string {
 function unitText(kind: Parameter['kind']): string {
   switch (kind.takes) {
     case 'quantity':
-      return kind.kind === 'level' ? `a level, in ${kind.unit} or any unit of its kind` : `in ${kind.unit} or any unit of its kind`;
+      return kind.kind === 'level'
+        ? `a level, in ${kind.unit} or any unit of its kind`
+        : `in ${kind.unit} or any unit of its kind`;
     case 'number':
       return kind.integer === true ? 'a whole number' : 'a number';
     case 'text':

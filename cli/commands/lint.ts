@@ -16,7 +16,8 @@ export async function lint(
     if ('fault' in source) diagnostics.push(source.fault);
     else diagnostics.push(...evaluateSheet({ entry: source.name, files: [source] }).diagnostics);
   }
-  if (options.format === 'json') streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics }, null, 2)}\n`);
+  if (options.format === 'json')
+    streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics }, null, 2)}\n`);
   else if (diagnostics.length > 0) streams.err(diagnosticsText(diagnostics, paintErr));
   else streams.err(`${count(files.length, 'sheet')}: nothing to report\n`);
   return diagnosticsStatus(diagnostics, options.strict === true);

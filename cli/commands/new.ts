@@ -9,9 +9,13 @@ export async function newStudy(folder: string, at: Invocation): Promise<ExitStat
   const path = resolve(at.cwd, folder);
   const existing = await readdir(path).catch((cause: NodeJS.ErrnoException) => {
     if (cause.code === 'ENOENT') return [];
-    throw new CommandFailure(EXIT.usage, `\`${folder}\` cannot be made: ${cause.code === 'ENOTDIR' ? 'it is a file' : String(cause.code)}`);
+    throw new CommandFailure(
+      EXIT.usage,
+      `\`${folder}\` cannot be made: ${cause.code === 'ENOTDIR' ? 'it is a file' : String(cause.code)}`,
+    );
   });
-  if (existing.length > 0) throw new CommandFailure(EXIT.usage, `the folder \`${folder}\` is not empty`, ['name a new folder']);
+  if (existing.length > 0)
+    throw new CommandFailure(EXIT.usage, `the folder \`${folder}\` is not empty`, ['name a new folder']);
   await mkdir(path, { recursive: true });
   return writeSheet(join(path, 'shaking-force.yaml'), at);
 }

@@ -14,7 +14,11 @@ import type { Invocation } from '../program.ts';
 const STANDARD_ATMOSPHERE = 101_325;
 
 /** The table of units, or what one value is in the other units of its kind. */
-export function units(text: string, { format }: { readonly format: 'text' | 'json' }, at: Invocation): Promise<ExitStatus> {
+export function units(
+  text: string,
+  { format }: { readonly format: 'text' | 'json' },
+  at: Invocation,
+): Promise<ExitStatus> {
   if (text.trim() === '') {
     at.streams.out(format === 'json' ? json(ALL_UNITS.map(asData)) : table(at));
     return Promise.resolve(EXIT.done);
@@ -23,12 +27,15 @@ export function units(text: string, { format }: { readonly format: 'text' | 'jso
   const { value, diagnostics } = parseQuantity(written, { file: 'argument', start: 0, end: written.length });
   if (value === undefined) {
     const located = diagnostics.map((diagnostic) => locateDiagnostic(diagnostic, () => written));
-    if (format === 'json') at.streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics: located }, null, 2)}\n`);
+    if (format === 'json')
+      at.streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics: located }, null, 2)}\n`);
     else at.streams.err(diagnosticsText(located, at.paintErr));
     return Promise.resolve(EXIT.sheetWrong);
   }
   const shown = conversions(value);
-  at.streams.out(format === 'json' ? json({ ...asData(value.unit), conversions: shown }) : conversionText(value, shown, at));
+  at.streams.out(
+    format === 'json' ? json({ ...asData(value.unit), conversions: shown }) : conversionText(value, shown, at),
+  );
   return Promise.resolve(EXIT.done);
 }
 
@@ -72,7 +79,11 @@ function conversions({ number, unit }: ParsedQuantity): Conversion[] {
   );
 }
 
-function conversionText({ number, unit }: ParsedQuantity, shown: readonly Conversion[], { paintOut }: Invocation): string {
+function conversionText(
+  { number, unit }: ParsedQuantity,
+  shown: readonly Conversion[],
+  { paintOut }: Invocation,
+): string {
   const head = `${paintOut('bold', `${printNumber(number, 10).replace(/\.?0+$/, '')} ${unit.text}`)}: ${describeType(unit)}`;
   const gauge = shown.some(({ unit: text }) => parseUnit(text)?.gauge === true)
     ? ['  gauge readings at the standard atmosphere, 101.325 kPa; a sheet states its own']

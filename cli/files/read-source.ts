@@ -10,8 +10,7 @@ import type { Surroundings } from '../terminal.ts';
 const MAX_BYTES = 1_000_000;
 
 export type ReadSource =
-  | { readonly name: string; readonly text: string }
-  | { readonly name: string; readonly fault: LocatedDiagnostic };
+  { readonly name: string; readonly text: string } | { readonly name: string; readonly fault: LocatedDiagnostic };
 
 /** Reads a sheet from a file, or from standard input for `-`. What is wrong with the file comes back as a diagnostic. */
 export async function readSource(file: string, surroundings: Surroundings): Promise<ReadSource> {
@@ -21,11 +20,15 @@ export async function readSource(file: string, surroundings: Surroundings): Prom
   const found = await stat(path).catch((cause: unknown) => cause as NodeJS.ErrnoException);
   if (found instanceof Error) return { name, fault: await notFound(name, path, found) };
   if (found.isDirectory()) {
-    return at(name, error('FILE_NOT_READABLE', start(name), `\`${name}\` is a folder`, { hints: ['name the sheet in it'] }));
+    return at(
+      name,
+      error('FILE_NOT_READABLE', start(name), `\`${name}\` is a folder`, { hints: ['name the sheet in it'] }),
+    );
   }
   if (found.size > MAX_BYTES) return tooLarge(name, found.size);
   const bytes = await readFile(path).catch((cause: unknown) => cause as NodeJS.ErrnoException);
-  if (bytes instanceof Error) return at(name, error('FILE_NOT_READABLE', start(name), `\`${name}\` cannot be read: ${reason(bytes)}`));
+  if (bytes instanceof Error)
+    return at(name, error('FILE_NOT_READABLE', start(name), `\`${name}\` cannot be read: ${reason(bytes)}`));
   return decode(name, bytes);
 }
 
@@ -42,9 +45,14 @@ function decode(name: string, bytes: Uint8Array): ReadSource {
 function notUtf8(name: string, bytes: Uint8Array): ReadSource {
   const text = new TextDecoder('utf-8').decode(bytes);
   const offset = Math.max(text.indexOf('\uFFFD'), 0);
-  const diagnostic = error('FILE_NOT_UTF8', { file: name, start: offset, end: offset + 1 }, 'the file is not UTF-8 text', {
-    hints: ['save it as UTF-8 (without a byte order mark)'],
-  });
+  const diagnostic = error(
+    'FILE_NOT_UTF8',
+    { file: name, start: offset, end: offset + 1 },
+    'the file is not UTF-8 text',
+    {
+      hints: ['save it as UTF-8 (without a byte order mark)'],
+    },
+  );
   return { name, fault: locateDiagnostic(diagnostic, () => text) };
 }
 
@@ -55,7 +63,10 @@ function tooLarge(name: string, size: number): ReadSource {
 
 async function notFound(name: string, path: string, cause: NodeJS.ErrnoException): Promise<LocatedDiagnostic> {
   if (cause.code !== 'ENOENT' && cause.code !== 'ENOTDIR') {
-    return locateDiagnostic(error('FILE_NOT_READABLE', start(name), `\`${name}\` cannot be read: ${reason(cause)}`), () => '');
+    return locateDiagnostic(
+      error('FILE_NOT_READABLE', start(name), `\`${name}\` cannot be read: ${reason(cause)}`),
+      () => '',
+    );
   }
   const siblings = await readdir(dirname(path)).catch(() => []);
   const near = nearest(basename(path), siblings);

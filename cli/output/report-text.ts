@@ -13,7 +13,11 @@ import type { Paint } from '../terminal.ts';
 import { count } from './print-diagnostics.ts';
 
 const WIDTH = 88;
-const STANDING = { within: ['●', 'within', 'green'], close: ['◐', 'close', 'yellow'], over: ['▲', 'over', 'red'] } as const;
+const STANDING = {
+  within: ['●', 'within', 'green'],
+  close: ['◐', 'close', 'yellow'],
+  over: ['▲', 'over', 'red'],
+} as const;
 
 /** The report as a terminal shows it: what is open first, then the sheet in its own order. */
 export function reportText(report: Report, paint: Paint): string {
@@ -31,7 +35,10 @@ export function reportText(report: Report, paint: Paint): string {
 }
 
 function titleLines({ sheet }: Report, paint: Paint): string[] {
-  return [`${paint('bold', sheet.title)}`, paint('dim', `${sheet.number} · ${'─'.repeat(Math.max(0, WIDTH - sheet.number.length - 3))}`)];
+  return [
+    `${paint('bold', sheet.title)}`,
+    paint('dim', `${sheet.number} · ${'─'.repeat(Math.max(0, WIDTH - sheet.number.length - 3))}`),
+  ];
 }
 
 function holdLines({ holds }: Report, paint: Paint): string[] {
@@ -40,7 +47,11 @@ function holdLines({ holds }: Report, paint: Paint): string[] {
 
 function sectionLines(section: ReportSection, number: number, paint: Paint): string[] {
   const title = paint('bold', `${number}  ${section.title}`);
-  return [title, '', ...groups(section.blocks).flatMap((blocks, i) => [...(i > 0 ? [''] : []), ...groupLines(blocks, paint)])];
+  return [
+    title,
+    '',
+    ...groups(section.blocks).flatMap((blocks, i) => [...(i > 0 ? [''] : []), ...groupLines(blocks, paint)]),
+  ];
 }
 
 /** Neighbouring blocks of one kind are set together, so that their columns line up. */
@@ -116,7 +127,10 @@ function noteLines(block: Block, paint: Paint): string[] {
 
 function summaryLines({ summary }: Report, paint: Paint): string[] {
   const { passed, failed, holds, governing } = summary;
-  const checks = failed > 0 ? paint('red', `${count(failed, 'check')} of ${passed + failed} over`) : `${count(passed, 'check')} pass`;
+  const checks =
+    failed > 0
+      ? paint('red', `${count(failed, 'check')} of ${passed + failed} over`)
+      : `${count(passed, 'check')} pass`;
   const governs = governing === null ? [] : [`governs ${governing.utilisation.toFixed(2)} ${governing.label}`];
   const open = holds > 0 ? [paint('yellow', `${count(holds, 'hold')} open`)] : [];
   return [[checks, ...governs, ...open].join(' · ')];

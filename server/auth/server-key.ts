@@ -20,7 +20,10 @@ const PURPOSE = 'antinode server key';
 const MASTER_KEY_FILE = 'master.key';
 
 /** The key with which the server signs heads of its log and bundles: made once, kept encrypted under the master key. */
-export async function loadServerKey(db: Database, config: Pick<ServerConfig, 'data' | 'masterKey'>): Promise<ServerKey> {
+export async function loadServerKey(
+  db: Database,
+  config: Pick<ServerConfig, 'data' | 'masterKey'>,
+): Promise<ServerKey> {
   const master = config.masterKey ?? (await masterKeyFile(config.data));
   const fresh = closeBox(JSON.stringify(await newSigningKey()), master, PURPOSE);
   // Of two servers that start on one database at once, one key stands, and both read it.

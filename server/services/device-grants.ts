@@ -50,7 +50,10 @@ export async function pollDevice({ db, now }: Context, deviceCode: string): Prom
     if (!grant) return { error: 'invalid_grant' };
     if (grant.expires <= time) return { error: 'expired_token' };
     if (isTooSoon(grant, time)) {
-      await tx.update(deviceGrants).set({ lastPolled: time, interval: grant.interval + SLOW_DOWN_S }).where(mine);
+      await tx
+        .update(deviceGrants)
+        .set({ lastPolled: time, interval: grant.interval + SLOW_DOWN_S })
+        .where(mine);
       return { error: 'slow_down' };
     }
     if (grant.state === 'waiting') {
@@ -83,7 +86,12 @@ export async function inquireDevice({ db, now }: Context, userCode: string): Pro
   };
 }
 
-export async function decideDevice(context: Context, person: Person, userCode: string, approve: boolean): Promise<void> {
+export async function decideDevice(
+  context: Context,
+  person: Person,
+  userCode: string,
+  approve: boolean,
+): Promise<void> {
   const { state } = await inquireDevice(context, userCode);
   if (state !== 'waiting') throw alreadyDecided(state);
   // Of two decisions at once the first stands.

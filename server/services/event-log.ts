@@ -88,7 +88,10 @@ export async function signedHead(
   const size = leaves.length;
   const known = await db.select({ jws: logHeads.jws }).from(logHeads).where(eq(logHeads.size, size));
   if (known[0]) return known[0].jws;
-  const [last] = await db.select({ time: events.time }).from(events).where(eq(events.index, size - 1));
+  const [last] = await db
+    .select({ time: events.time })
+    .from(events)
+    .where(eq(events.index, size - 1));
   const time = last && last.time > now ? last.time : now;
   const root = treeRoot(leaves);
   const jws = await signLogHead({ antinode: 'log-head/1', size, root, time: time.toISOString() }, signingKey);

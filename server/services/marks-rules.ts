@@ -5,6 +5,7 @@ import type { Standing } from './review.ts';
 export function refuseMark({ roles, isAuthor, state }: Standing): Refusal | null {
   if (!roles.includes('checker')) return new Refusal('wrong-role', 'only a checker of the study may mark blocks');
   if (isAuthor) return new Refusal('same-person', 'you wrote this revision; someone else must check it');
-  if (state !== 'in check') return new Refusal('wrong-state', `the revision is ${state}, so its blocks can't be marked`);
+  if (state !== 'in check')
+    return new Refusal('wrong-state', `the revision is ${state}, so its blocks can't be marked`);
   return null;
 }

@@ -38,7 +38,12 @@ export const MOVES: Readonly<Record<Move, Rule>> = {
 
 /** Why the person may not make the move; null where they may. The note is not looked at: it is asked for with the move. */
 export function whyNot(move: Move, standing: Standing): Refusal | null {
-  return refuseRole(move, standing) ?? refusePerson(move, standing) ?? refuseState(move, standing) ?? refuseOpen(move, standing);
+  return (
+    refuseRole(move, standing) ??
+    refusePerson(move, standing) ??
+    refuseState(move, standing) ??
+    refuseOpen(move, standing)
+  );
 }
 
 /** The moves that the state knows and the person's roles allow, each with the reason where it is refused all the same. */
@@ -57,7 +62,10 @@ export function refuseWithoutNote(move: Move, { failed }: Standing, note: string
   if (note.trim() !== '') return null;
   if (move === 'return') return new Refusal('note-required', 'say in a note what is to be done');
   if (move !== 'approve' || failed === 0) return null;
-  return new Refusal('note-required', `${count(failed, 'check')} failed: say in a note why it is approved all the same`);
+  return new Refusal(
+    'note-required',
+    `${count(failed, 'check')} failed: say in a note why it is approved all the same`,
+  );
 }
 
 function refuseRole(move: Move, standing: Standing): Refusal | null {
@@ -66,7 +74,10 @@ function refuseRole(move: Move, standing: Standing): Refusal | null {
     return standing.isAuthor ? null : new Refusal('wrong-role', 'only its author may hand a revision over');
   }
   if (standing.roles.includes(wanted)) return null;
-  return new Refusal('wrong-role', `only ${wanted === 'approver' ? 'an' : 'a'} ${wanted} of the study may ${WORDS[move]}`);
+  return new Refusal(
+    'wrong-role',
+    `only ${wanted === 'approver' ? 'an' : 'a'} ${wanted} of the study may ${WORDS[move]}`,
+  );
 }
 
 const WORDS: Readonly<Record<Move, string>> = {
@@ -103,7 +114,10 @@ function refuseOpen(move: Move, { unmarked, mustFix, holds }: Standing): Refusal
     return new Refusal('blocks-unmarked', `${count(unmarked, 'block')} ${unmarked === 1 ? 'is' : 'are'} not marked`);
   }
   if (mustFix > 0) {
-    return new Refusal('must-fix-open', `${count(mustFix, 'must-fix remark')} ${mustFix === 1 ? 'is' : 'are'} not resolved`);
+    return new Refusal(
+      'must-fix-open',
+      `${count(mustFix, 'must-fix remark')} ${mustFix === 1 ? 'is' : 'are'} not resolved`,
+    );
   }
   if (move === 'approve' && holds > 0) {
     return new Refusal('holds-open', `${count(holds, 'hold')} ${holds === 1 ? 'is' : 'are'} open`);

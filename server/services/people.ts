@@ -20,7 +20,10 @@ export interface NewPerson {
 export const PERSON = { id: people.id, name: people.name, email: people.email } as const;
 
 /** A new person with a signing key of their own. Throws when the address is taken. */
-export async function createPerson({ db, now }: Context, { name, email, password, isDemo }: NewPerson): Promise<Person> {
+export async function createPerson(
+  { db, now }: Context,
+  { name, email, password, isDemo }: NewPerson,
+): Promise<Person> {
   const [passwordHash, key] = await Promise.all([hashPassword(password), newRestingKey(password)]);
   const person = { id: randomUUID(), name, email };
   const created = now();

@@ -18,7 +18,8 @@ export function checkFiles({ entry, files }: Pick<Push, 'entry' | 'files'>): voi
   if (new Set(names.map((name) => name.toLowerCase())).size !== names.length) {
     throw new Refusal('bad-file-name', 'two files have the same name');
   }
-  if (!names.includes(entry)) throw new Refusal('bad-file-name', `the sheet ${JSON.stringify(entry)} is not among the files`);
+  if (!names.includes(entry))
+    throw new Refusal('bad-file-name', `the sheet ${JSON.stringify(entry)} is not among the files`);
   const unreadable = files.find(({ text }) => text.includes('\0') || hasLoneSurrogate(text));
   if (unreadable) throw new Refusal('bad-body', `${unreadable.name} holds characters that no text file can hold`);
 }

@@ -160,7 +160,12 @@ async function writeBlocks(tx: Database, revisionId: string, { sections }: Repor
 }
 
 /** The event of the push, after that of the return of an unfinished former revision, which it replaces. */
-async function recordPush(tx: Database, pushed: NewRevision, revision: WrittenRevision, place: LogPlace): Promise<void> {
+async function recordPush(
+  tx: Database,
+  pushed: NewRevision,
+  revision: WrittenRevision,
+  place: LogPlace,
+): Promise<void> {
   const { study, report, person, former, time } = pushed;
   const about = { study, number: report.sheet.number, person };
   let next = place;

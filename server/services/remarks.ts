@@ -23,7 +23,12 @@ export function mayResolve({ roles, isAuthor }: Pick<Standing, 'roles' | 'isAuth
   return !isAuthor && RESOLVERS.some((role) => roles.includes(role));
 }
 
-export function raiseRemark({ db, now }: Context, person: Person, ref: RevisionRef, remark: NewRemark): Promise<Remark> {
+export function raiseRemark(
+  { db, now }: Context,
+  person: Person,
+  ref: RevisionRef,
+  remark: NewRemark,
+): Promise<Remark> {
   return db.transaction(async (tx) => {
     requireRole(await membershipIn(tx, person, ref.study), RAISERS, 'raise remarks');
     const record = await sheetRecord(tx, ref.study, ref.number, true);
@@ -130,7 +135,10 @@ export async function toRemarks(db: Database, record: SheetRecord, rows: readonl
   if (rows.length === 0) return [];
   const ids = rows.map(({ id }) => id);
   const found = await db.select().from(replies).where(inArray(replies.remarkId, ids)).orderBy(asc(replies.position));
-  const people = await peopleById(db, [...rows, ...found].map(({ personId }) => personId));
+  const people = await peopleById(
+    db,
+    [...rows, ...found].map(({ personId }) => personId),
+  );
   const threads = groupBy(found, ({ remarkId }) => remarkId);
   const letters = new Map(record.revisions.map(({ id, letter }) => [id, letter]));
   return rows.map((row) => ({

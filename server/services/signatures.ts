@@ -39,9 +39,18 @@ export async function addSignature(tx: Database, signature: NewSignature): Promi
     time: time.toISOString(),
   };
   const [jws, { kid }] = await Promise.all([signClaims(claims, key), publicKeyOf(key)]);
-  await tx
-    .insert(signatures)
-    .values({ id: randomUUID(), revisionId: revision.id, role, personId: person.id, kid, name, email, meaning, time, jws });
+  await tx.insert(signatures).values({
+    id: randomUUID(),
+    revisionId: revision.id,
+    role,
+    personId: person.id,
+    kid,
+    name,
+    email,
+    meaning,
+    time,
+    jws,
+  });
 }
 
 export type SignatureRow = typeof signatures.$inferSelect & { readonly x: string };

@@ -51,10 +51,7 @@ export const revisionFiles = pgTable(
       .notNull()
       .references(() => blobs.digest),
   },
-  (table) => [
-    primaryKey({ columns: [table.revisionId, table.position] }),
-    unique().on(table.revisionId, table.name),
-  ],
+  (table) => [primaryKey({ columns: [table.revisionId, table.position] }), unique().on(table.revisionId, table.name)],
 );
 
 /** Blocks of a revision's report, for marks to be held against without reading the report. */
@@ -68,8 +65,5 @@ export const revisionBlocks = pgTable(
     path: text().notNull(),
     digest: text().notNull(),
   },
-  (table) => [
-    primaryKey({ columns: [table.revisionId, table.position] }),
-    unique().on(table.revisionId, table.path),
-  ],
+  (table) => [primaryKey({ columns: [table.revisionId, table.position] }), unique().on(table.revisionId, table.path)],
 );
