@@ -24,7 +24,7 @@ const SOURCES = [
 ];
 
 // Packages of CommonJS that are inlined into an ES module still call `require`.
-const REQUIRE = "import{createRequire as __require}from'node:module';const require=__require(import.meta.url);";
+const REQUIRE = "import{createRequire as antinodeRequire}from'node:module';const require=antinodeRequire(import.meta.url);";
 
 const node: BuildOptions = {
   absWorkingDir: root,
@@ -61,10 +61,17 @@ async function buildCli(): Promise<void> {
 async function buildServer(): Promise<void> {
   await esbuild({
     ...node,
-    entryPoints: { main: 'server/main.ts', 'evaluate-worker': 'server/evaluate/worker.ts' },
+    entryPoints: ['server/main.ts'],
     outdir: 'dist/server',
     packages: 'external',
     sourcemap: true,
+  });
+  // With its packages inlined, a thread starts in a tenth of the time.
+  await esbuild({
+    ...node,
+    entryPoints: { 'evaluate-worker': 'server/evaluate/worker.ts' },
+    outdir: 'dist/server',
+    banner: { js: REQUIRE },
   });
   await cp(join(root, 'server/migrations'), join(root, 'dist/server/migrations'), { recursive: true });
 }

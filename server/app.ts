@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import express, { Router, type Express } from 'express';
 import helmet from 'helmet';
-import { pino, type Logger } from 'pino';
+import { destination, pino, type Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
 import type { Health } from '../schemas/api.ts';
 import { CORE_VERSION } from '../core/version.ts';
@@ -19,11 +19,10 @@ import type { Context } from './services/context.ts';
 /** Sources and report of a sheet of the largest size, with room for the JSON around them. */
 const BODY_LIMIT = '12mb';
 
+/** The log goes to standard error: standard output is the command's answer. */
 export function makeLogger({ logLevel }: Pick<ServerConfig, 'logLevel'>): Logger {
-  return pino({
-    level: logLevel,
-    redact: ['req.headers.authorization', 'req.headers.cookie', 'res.headers["set-cookie"]'],
-  });
+  const redact = ['req.headers.authorization', 'req.headers.cookie', 'res.headers["set-cookie"]'];
+  return pino({ level: logLevel, redact }, destination(2));
 }
 
 /** The whole application: security headers, log, who is there, the API, the viewer, and the last word on errors. */

@@ -66,7 +66,7 @@ export function readConfig(env: Environment = process.env, options: ServerOption
     data: data ?? resolve('data'),
     host: host ?? '127.0.0.1',
     port: port ?? 5181,
-    logLevel: logLevel ?? 'info',
+    logLevel: logLevel ?? 'warn',
     isDemo: options.demo ?? false,
     ...(databaseUrl === undefined ? {} : { databaseUrl }),
     ...(publicUrl === undefined ? {} : { publicUrl }),

@@ -7,4 +7,5 @@ const isBuilt = import.meta.filename.endsWith('.js');
 export const PACKAGE_ROOT = isBuilt ? join(here, '../..') : join(here, '..');
 export const MIGRATIONS = join(here, 'migrations');
 export const WEB_ROOT = join(PACKAGE_ROOT, 'dist/web');
-export const WORKER = isBuilt ? join(here, 'evaluate-worker.js') : join(here, 'evaluate/worker.ts');
+/** Always the built one: a thread does not inherit the loader with which sources run. */
+export const WORKER = join(PACKAGE_ROOT, 'dist/server/evaluate-worker.js');

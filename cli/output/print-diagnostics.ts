@@ -18,7 +18,10 @@ export function diagnosticsText(diagnostics: readonly LocatedDiagnostic[], paint
 export function countLine(diagnostics: readonly LocatedDiagnostic[]): string {
   const of = (severity: LocatedDiagnostic['severity']): number =>
     diagnostics.filter((diagnostic) => diagnostic.severity === severity).length;
-  return [count(of('error'), 'error'), count(of('warning'), 'warning')].join(', ');
+  return (['error', 'warning'] as const)
+    .filter((severity) => of(severity) > 0)
+    .map((severity) => count(of(severity), severity))
+    .join(', ');
 }
 
 export function count(n: number, noun: string): string {

@@ -24,7 +24,7 @@ export function reportText(report: Report, paint: Paint): string {
   const parts = [
     titleLines(report, paint),
     holdLines(report, paint),
-    ...report.sections.map((section, i) => sectionLines(section, i + 1, paint)),
+    ...report.sections.map((section) => sectionLines(section, paint)),
     summaryLines(report, paint),
     report.cautions.map((line) => paint('dim', line)),
   ];
@@ -45,8 +45,10 @@ function holdLines({ holds }: Report, paint: Paint): string[] {
   return holds.map((hold) => `${paint(['yellow', 'bold'], '◔ hold')}  ${hold.label}: ${hold.reason}`);
 }
 
-function sectionLines(section: ReportSection, number: number, paint: Paint): string[] {
-  const title = paint('bold', `${number}  ${section.title}`);
+/** Only the sheet's own sections have a number: it is the one in their paths. */
+function sectionLines(section: ReportSection, paint: Paint): string[] {
+  const number = /^sections\/(\d+)$/.exec(section.path)?.[1];
+  const title = paint('bold', number === undefined ? section.title : `${number}  ${section.title}`);
   return [
     title,
     '',

@@ -79,8 +79,6 @@ export function makeEvaluatePool(limits: Partial<PoolLimits> = {}): EvaluatePool
 
 function startWorker(megabytes: number): Worker {
   const worker = new Worker(WORKER, {
-    // From the sources the thread needs the same loader as the server.
-    execArgv: WORKER.endsWith('.ts') ? ['--import', 'tsx'] : [],
     resourceLimits: { maxOldGenerationSizeMb: megabytes, maxYoungGenerationSizeMb: 32, stackSizeMb: 4 },
   });
   worker.unref();
@@ -93,29 +91,31 @@ function runJob(worker: Worker, job: Job, isReady: boolean, seconds: number): Pr
     let timer: NodeJS.Timeout | undefined;
     const settle = (isSound: boolean, act: () => void): void => {
       clearTimeout(timer);
-      worker.removeAllListeners();
+      worker.off('message', onMessage).off('error', onError).off('exit', onExit);
       // A terminated thread may still report its end; nobody waits for that any more.
-      worker.on('error', () => undefined);
-      if (!isSound) void worker.terminate();
-      act();
+      if (!isSound) void worker.on('error', () => undefined).terminate();
+      // First the pool takes the thread back, then the caller goes on: its next sheet finds the thread idle.
       done(isSound);
+      act();
     };
-    const stopped = (detail: string) => settle(false, () => job.reject(new Refusal('evaluation-stopped', detail)));
+    const stopped = (detail: string): void =>
+      settle(false, () => job.reject(new Refusal('evaluation-stopped', detail)));
     const start = (): void => {
       // The time of starting the thread is not the sheet's.
       timer = setTimeout(() => stopped(`the sheet takes longer than ${seconds} s to evaluate`), seconds * 1000);
       worker.postMessage(job.task);
     };
-    worker.on('message', (message: Answer) => {
+    const onMessage = (message: Answer): void => {
       if (message.answer === 'ready') start();
       else if (message.answer === 'outcome') settle(true, () => job.resolve(message.outcome));
       else settle(false, () => job.reject(new Error(`the evaluation failed: ${message.message}`)));
-    });
-    worker.on('error', (cause: Error & { readonly code?: string }) => {
+    };
+    const onError = (cause: Error & { readonly code?: string }): void => {
       if (cause.code === 'ERR_WORKER_OUT_OF_MEMORY') stopped('the sheet takes too much memory to evaluate');
       else settle(false, () => job.reject(cause));
-    });
-    worker.on('exit', () => settle(false, () => job.reject(new Refusal('busy', 'the server is stopping'))));
+    };
+    const onExit = (): void => settle(false, () => job.reject(new Refusal('busy', 'the server is stopping')));
+    worker.on('message', onMessage).on('error', onError).on('exit', onExit);
     if (isReady) start();
   });
 }
