@@ -24,7 +24,8 @@ const SOURCES = [
 ];
 
 // Packages of CommonJS that are inlined into an ES module still call `require`.
-const REQUIRE = "import{createRequire as antinodeRequire}from'node:module';const require=antinodeRequire(import.meta.url);";
+const REQUIRE =
+  "import{createRequire as antinodeRequire}from'node:module';const require=antinodeRequire(import.meta.url);";
 
 const node: BuildOptions = {
   absWorkingDir: root,

@@ -14,12 +14,12 @@ const OLDER_FORMAT = /,\s*url\([^)]*\.(?:woff|ttf)\)\s*format\([^)]*\)/g;
 /** Keeps of each font the faces that reports need, in woff2 alone. */
 const chosenFaces: Plugin = {
   name: 'chosen-faces',
-  setup({ onLoad }) {
-    onLoad({ filter: /@fontsource.*\.css$/ }, async ({ path }) => ({
+  setup(build) {
+    build.onLoad({ filter: /@fontsource.*\.css$/ }, async ({ path }) => ({
       contents: (await woff2Only(path)).replace(FONT_FACE, (face) => (SUBSETS.test(face) ? face : '')),
       loader: 'css',
     }));
-    onLoad({ filter: /katex.*\.css$/ }, async ({ path }) => ({ contents: await woff2Only(path), loader: 'css' }));
+    build.onLoad({ filter: /katex.*\.css$/ }, async ({ path }) => ({ contents: await woff2Only(path), loader: 'css' }));
   },
 };
 

@@ -6,6 +6,8 @@ import { createHash } from 'node:crypto';
 import { mkdir, readdir, readFile, writeFile } from 'node:fs/promises';
 import { basename, dirname, join } from 'node:path';
 import type { AnySchemaObject } from 'ajv/dist/2020.js';
+import type * as standalone from 'ajv/dist/standalone/index.js';
+import type * as formats from 'ajv-formats';
 import type { Plugin } from 'esbuild';
 
 const root = join(import.meta.dirname, '..');
@@ -114,8 +116,8 @@ async function compile(target: Target, shared: readonly AnySchemaObject[], key: 
   // Loaded only when there is something to compile: most runs find everything current.
   const [{ Ajv2020 }, standaloneCode, addFormats] = await Promise.all([
     import('ajv/dist/2020.js'),
-    import('ajv/dist/standalone/index.js'),
-    import('ajv-formats'),
+    importDefault<typeof standalone.default>('ajv/dist/standalone/index.js'),
+    importDefault<typeof formats.default>('ajv-formats'),
   ]);
   const ajv = new Ajv2020({
     allErrors: true,
@@ -125,14 +127,21 @@ async function compile(target: Target, shared: readonly AnySchemaObject[], key: 
     code: { esm: true, source: true },
     schemas: [...new Set([...shared, target.schema])],
   });
-  addFormats.default.default(ajv);
+  addFormats(ajv);
   const id: unknown = target.schema['$id'];
   if (typeof id !== 'string') throw new Error(`the schema of ${target.module} has no $id`);
-  const code = standaloneCode.default.default(ajv, { [target.name]: id });
+  const code = standaloneCode(ajv, { [target.name]: id });
   await Promise.all([
     writeIfChanged(`${target.module}.js`, firstLine(key) + (await selfContained(code))),
     writeIfChanged(`${target.module}.d.ts`, firstLine(key) + declaration(target)),
   ]);
+}
+
+/** These packages are CommonJS: Node and the bundlers disagree on how deep their default export lies. */
+async function importDefault<T>(name: string): Promise<T> {
+  let found: unknown = await import(name);
+  while (typeof found === 'object' && found !== null && 'default' in found) found = found.default;
+  return found as T;
 }
 
 /** The validator with the few helpers that ajv's code requires at run time put in. */
@@ -156,8 +165,8 @@ async function selfContained(code: string): Promise<string> {
 /** ajv's helpers carry, as text for its own generator, the statement that loads them: of no use in a finished module. */
 const withoutRequireText: Plugin = {
   name: 'without-require-text',
-  setup({ onLoad }) {
-    onLoad({ filter: /ajv[\\/]dist[\\/]runtime[\\/]\w+\.js$/ }, async ({ path }) => {
+  setup(build) {
+    build.onLoad({ filter: /ajv[\\/]dist[\\/]runtime[\\/]\w+\.js$/ }, async ({ path }) => {
       const text = await readFile(path, 'utf8');
       return { contents: text.replace(/^\w+\.code = .*$/m, ''), loader: 'js' };
     });

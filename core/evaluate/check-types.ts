@@ -70,9 +70,9 @@ function readsOf(step: ReadStep): ReadonlySet<string> {
 }
 
 /** Every name that the sheet defines, well or not. */
-function definedNames({ inputs, sections }: SheetDocument): Set<string> {
+function definedNames({ inputs, sections, unread }: SheetDocument): Set<string> {
   const steps = sections.flatMap((section) => section.steps);
-  return new Set([...inputs, ...steps].map((node) => node.name.text));
+  return new Set([...[...inputs, ...steps].map((node) => node.name), ...unread].map((name) => name.text));
 }
 
 function circleFault(circle: readonly string[], steps: ReadonlyMap<string, ReadStep>): Diagnostic {

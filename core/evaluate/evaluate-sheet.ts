@@ -6,7 +6,7 @@ import type { EvaluatedSheet } from '../report/evaluated-sheet.ts';
 import type { SheetDocument } from '../sheet/document.ts';
 import { parseSheet } from '../sheet/parse-sheet.ts';
 import { assembleSheet } from './assemble-sheet.ts';
-import { checkSymbols } from './check-symbols.ts';
+import { checkLabels } from './check-labels.ts';
 import { checkTypes } from './check-types.ts';
 import { compute } from './compute.ts';
 import { readFormulas } from './read-formulas.ts';
@@ -47,11 +47,14 @@ function missingFile(entry: string): Outcome {
 function evaluateText(text: string, request: EvaluateRequest): Outcome {
   const parsed = parseSheet(request.entry, text);
   if (parsed.value === undefined) return { sheet: null, diagnostics: parsed.diagnostics };
-  const { sheet, diagnostics } = evaluateDocument(parsed.value, request);
-  return { sheet: hasErrors(parsed.diagnostics) ? null : sheet, diagnostics: [...parsed.diagnostics, ...diagnostics] };
+  return evaluateDocument(parsed.value, parsed.diagnostics, request);
 }
 
-function evaluateDocument(document: SheetDocument, request: EvaluateRequest): Outcome {
+function evaluateDocument(
+  document: SheetDocument,
+  parseDiagnostics: readonly Diagnostic[],
+  request: EvaluateRequest,
+): Outcome {
   const units = request.units === document.units ? undefined : request.units;
   const atmosphere = readAtmosphere(document, units);
   const inputs = readInputs(document, request.overrides ?? [], atmosphere.value?.si, units);
@@ -65,7 +68,7 @@ function evaluateDocument(document: SheetDocument, request: EvaluateRequest): Ou
     hasAtmosphere: atmosphere.value !== undefined || document.atmosphere !== undefined,
   });
   const phases = [atmosphere, inputs, gases, formulas, typed].flatMap((phase) => phase.diagnostics);
-  const found = [...checkSymbols(document), ...phases];
+  const found = [...parseDiagnostics, ...checkLabels(document), ...phases];
   if (hasErrors(found)) return { sheet: null, diagnostics: found };
 
   const computed = compute(typed, {

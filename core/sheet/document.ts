@@ -64,4 +64,6 @@ export interface SheetDocument {
   readonly gases: readonly GasNode[];
   readonly inputs: readonly InputNode[];
   readonly sections: readonly SectionNode[];
+  /** Names of inputs and steps that could not be read; their faults are reported already. */
+  readonly unread: readonly Text[];
 }

@@ -1,4 +1,4 @@
-import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
+import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express';
 import { loggable } from '../db/failure.ts';
 import { notFound, Refusal } from '../problem.ts';
 
@@ -19,8 +19,13 @@ export const answerErrors: ErrorRequestHandler = (cause: unknown, request, respo
   const refusal = asRefusal(cause);
   if (refusal.status >= 500 && !(cause instanceof Refusal))
     request.log.error({ failure: loggable(cause) }, 'request failed');
-  send(response, refusal, String(request.id));
+  send(response, refusal, requestId(request));
 };
+
+/** Made by us for each request (app.ts), so always a text. */
+function requestId({ id }: Request): string {
+  return typeof id === 'string' ? id : '';
+}
 
 function send(response: Response, refusal: Refusal, requestId: string): void {
   const { retryAfter } = refusal.parts;

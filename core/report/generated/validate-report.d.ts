@@ -1,4 +1,4 @@
-// Made from the JSON Schemas by .build/schemas.ts; do not edit. 9014203406e68be70be4d3a5af44c2e87c119147a2b6ba279bd4d7546d0edc53
+// Made from the JSON Schemas by .build/schemas.ts; do not edit. c4dca9e5f3d44438b633786a198306773ebff8154a4f4fe797739ca91c006b9e
 import type { ErrorObject } from 'ajv';
 import type { Report } from '../model.ts';
 
