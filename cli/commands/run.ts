@@ -53,12 +53,12 @@ async function rendered(report: Report, { format, out }: RunOptions, at: Invocat
     case 'html':
       return (await import('../output/report-html.ts')).reportHtml(report);
     case 'text':
-      return reportText(report, out === undefined ? at.paintOut : (_, text) => text);
+      return reportText(report, out === undefined || out === '-' ? at.paintOut : (_, text) => text);
   }
 }
 
 async function answer(text: string, { out }: RunOptions, at: Invocation): Promise<void> {
-  if (out === undefined) {
+  if (out === undefined || out === '-') {
     at.streams.out(text);
     return;
   }

@@ -19,7 +19,7 @@ export async function callApi<T>(call: ApiCall): Promise<ApiAnswer<T>> {
   const text = await response.text();
   const value = parse(text);
   if (response.ok) return { ok: true, value: value as T };
-  return { ok: false, status: response.status, problem: (value ?? { detail: text.slice(0, 200) }) };
+  return { ok: false, status: response.status, problem: value ?? { detail: text.slice(0, 200) } };
 }
 
 /** As {@link callApi}, for commands that can do nothing with a refusal but tell it. */

@@ -101,11 +101,8 @@ const FAULTS: readonly Fault[] = [
       'title: Bomb',
       'units: us',
       'assumptions:',
-      '  - &a0 "ha"',
-      ...Array.from({ length: 12 }, (_, i) => {
-        const alias = `${i === 0 ? HERE : ''}*a${i}`;
-        return `  - &a${i + 1} [${[alias, ...Array.from({ length: 9 }, () => `*a${i}`)].join(', ')}]`;
-      }),
+      `  - &a0 ${HERE}"ha"`,
+      ...Array.from({ length: 12 }, (_, i) => `  - &a${i + 1} [${Array.from({ length: 10 }, () => `*a${i}`).join(', ')}]`),
     ),
   },
   {
@@ -269,7 +266,7 @@ describe('a file that is no sheet', () => {
     await write('bad.yaml', sheetText({ steps: ['x: dp*unknown'] }));
     const ended = await cli(['lint', 'none.yaml', 'bad.yaml', 'good.yaml']);
     expect(ended.status).toBe(2);
-    expect(reported(ended.err)).toEqual(['FILE_NOT_FOUND none.yaml:1:1', 'NAME_UNKNOWN bad.yaml:20:13']);
+    expect(reported(ended.err)).toEqual(['FILE_NOT_FOUND none.yaml:1:1', 'NAME_UNKNOWN bad.yaml:18:13']);
   });
 });
 
