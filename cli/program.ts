@@ -1,6 +1,7 @@
 import { Command, CommanderError, Option } from 'commander';
 import { CORE_VERSION } from '../core/version.ts';
 import { CommandFailure, EXIT, type ExitStatus } from './exit-status.ts';
+import { harmlessText } from './output/harmless.ts';
 import { paintFor, type Paint, type Surroundings } from './terminal.ts';
 
 /** What every command is given besides its own arguments. */
@@ -40,8 +41,8 @@ export async function runCli(args: readonly string[], surroundings: Surroundings
 function explainFailure(cause: unknown, { streams, paintErr, env }: Invocation): ExitStatus {
   if (cause instanceof CommanderError) return cause.exitCode === 0 ? EXIT.done : EXIT.usage;
   if (cause instanceof CommandFailure) {
-    streams.err(`${paintErr(['red', 'bold'], 'error')}: ${cause.message}\n`);
-    for (const hint of cause.hints) streams.err(`  = hint: ${hint}\n`);
+    streams.err(`${paintErr(['red', 'bold'], 'error')}: ${harmlessText(cause.message)}\n`);
+    for (const hint of cause.hints) streams.err(`  = hint: ${harmlessText(hint)}\n`);
     return cause.status;
   }
   streams.err(
@@ -92,7 +93,13 @@ const jsonFormat = (): Option =>
   new Option('--format <format>', 'form of the answer').choices(['text', 'json']).default('text');
 
 function sheetCommands(program: Command, execute: Execute): void {
-  const create = program.command('new').description('write a commented starting point that runs');
+  const create = program
+    .command('new')
+    .description('write a commented starting point that runs')
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode new study compressor-study\n  antinode new sheet lateral-force.yaml\n',
+    );
   create
     .command('study')
     .argument('<dir>', 'folder to make')
@@ -192,11 +199,13 @@ function serverCommands(program: Command, execute: Execute): void {
   program
     .command('logout')
     .description('forget the sign-in')
+    .addHelpText('before', 'Example:\n  antinode logout\n')
     .action(() => execute(async (at) => (await import('./commands/logout.ts')).logout(at)));
   program
     .command('whoami')
     .description('who is signed in, and where')
     .addOption(jsonFormat())
+    .addHelpText('before', 'Examples:\n  antinode whoami\n  antinode whoami --format json\n')
     .action((options: { format: 'text' | 'json' }) =>
       execute(async (at) => (await import('./commands/whoami.ts')).whoami(options, at)),
     );

@@ -35,10 +35,10 @@ function catalogue(format: 'text' | 'json'): string {
 
 function one(name: string, format: 'text' | 'json', at: Invocation): string {
   const fn = LIBRARY.get(name);
-  if (fn !== undefined) return format === 'json' ? json(asData(fn)) : described(fn, at);
+  if (fn !== undefined) return format === 'json' ? json([asData(fn)]) : described(fn, at);
   const mathematics = MATHEMATICS.get(name);
   if (mathematics !== undefined)
-    return format === 'json' ? json({ name, summary: mathematics.summary }) : `${name}: ${mathematics.summary}\n`;
+    return format === 'json' ? json([{ name, summary: mathematics.summary }]) : `${name}: ${mathematics.summary}\n`;
   const near = nearest(name, [...LIBRARY.keys(), ...MATHEMATICS.keys()], 3);
   throw new CommandFailure(EXIT.usage, `there is no function \`${name}\``, [
     near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : '`antinode functions` lists all',
@@ -103,6 +103,6 @@ function asData({ evaluate: _, ...data }: LibraryFunction): unknown {
   return data;
 }
 
-function json(value: unknown): string {
-  return `${JSON.stringify({ antinode: 'functions/1', functions: value }, null, 2)}\n`;
+function json(functions: readonly unknown[]): string {
+  return `${JSON.stringify({ antinode: 'functions/1', functions }, null, 2)}\n`;
 }

@@ -26,11 +26,15 @@ export function newSheet(file: string, at: Invocation): Promise<ExitStatus> {
 
 async function writeSheet(path: string, at: Invocation): Promise<ExitStatus> {
   const shown = relative(at.cwd, path);
-  await mkdir(dirname(path), { recursive: true });
-  await writeFile(path, SHEET_TEMPLATE, { flag: 'wx' }).catch((cause: NodeJS.ErrnoException) => {
-    const reason = cause.code === 'EEXIST' ? 'exists already' : `cannot be written: ${cause.code ?? cause.message}`;
+  const refuse = (reason: string): never => {
     throw new CommandFailure(EXIT.usage, `\`${shown}\` ${reason}`);
-  });
+  };
+  await mkdir(dirname(path), { recursive: true }).catch((cause: NodeJS.ErrnoException) =>
+    refuse(`cannot be written: ${cause.code ?? cause.message}`),
+  );
+  await writeFile(path, SHEET_TEMPLATE, { flag: 'wx' }).catch((cause: NodeJS.ErrnoException) =>
+    refuse(cause.code === 'EEXIST' ? 'exists already' : `cannot be written: ${cause.code ?? cause.message}`),
+  );
   at.streams.out(`${shown}\n`);
   at.streams.err(`Next: antinode run ${shown}\n`);
   return EXIT.done;

@@ -1,5 +1,6 @@
 import type { RevisionSummary, StudyDetail, StudySummary } from '../../schemas/api.ts';
 import { EXIT, type ExitStatus } from '../exit-status.ts';
+import { harmless } from '../output/harmless.ts';
 import { count } from '../output/print-diagnostics.ts';
 import type { Invocation } from '../program.ts';
 import { requireApi } from '../remote/api.ts';
@@ -24,7 +25,11 @@ export async function status(
   if (format === 'json') at.streams.out(`${JSON.stringify({ antinode: 'status/1', studies: data }, null, 2)}\n`);
   else
     at.streams.out(
-      data.length === 0 ? 'you are in no study\n' : `${data.map((entry) => studyText(entry, at)).join('\n\n')}\n`,
+      data.length === 0
+        ? 'you are in no study\n'
+        : `${harmless(data)
+            .map((entry) => studyText(entry, at))
+            .join('\n\n')}\n`,
     );
   return EXIT.done;
 }

@@ -20,22 +20,19 @@ export function units(
   at: Invocation,
 ): Promise<ExitStatus> {
   if (text.trim() === '') {
-    at.streams.out(format === 'json' ? json(ALL_UNITS.map(asData)) : table(at));
+    at.streams.out(format === 'json' ? json({ antinode: 'units/1', units: ALL_UNITS.map(asData) }) : table(at));
     return Promise.resolve(EXIT.done);
   }
   const written = parseUnit(text) === null ? text : `1 ${text}`;
   const { value, diagnostics } = parseQuantity(written, { file: 'argument', start: 0, end: written.length });
   if (value === undefined) {
     const located = diagnostics.map((diagnostic) => locateDiagnostic(diagnostic, () => written));
-    if (format === 'json')
-      at.streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics: located }, null, 2)}\n`);
+    if (format === 'json') at.streams.out(json({ antinode: 'diagnostics/1', diagnostics: located }));
     else at.streams.err(diagnosticsText(located, at.paintErr));
     return Promise.resolve(EXIT.sheetWrong);
   }
   const shown = conversions(value);
-  at.streams.out(
-    format === 'json' ? json({ ...asData(value.unit), conversions: shown }) : conversionText(value, shown, at),
-  );
+  at.streams.out(format === 'json' ? json(conversionData(value, shown)) : conversionText(value, shown, at));
   return Promise.resolve(EXIT.done);
 }
 
@@ -96,6 +93,10 @@ function asData({ text, factor, shift, gauge, kind, dimension }: Unit): Record<s
   return { unit: text, dimension: describeType({ dimension, kind }), factor, shift, gauge };
 }
 
+function conversionData({ number, unit }: ParsedQuantity, conversions: readonly Conversion[]): unknown {
+  return { antinode: 'conversion/1', value: number, unit: unit.text, dimension: describeType(unit), conversions };
+}
+
 function json(value: unknown): string {
-  return `${JSON.stringify({ antinode: 'units/1', units: value }, null, 2)}\n`;
+  return `${JSON.stringify(value, null, 2)}\n`;
 }

@@ -10,6 +10,7 @@ import type {
   StepBlock,
 } from '../../core/report/model.ts';
 import type { Paint } from '../terminal.ts';
+import { harmless } from './harmless.ts';
 import { count } from './print-diagnostics.ts';
 
 const WIDTH = 88;
@@ -20,7 +21,8 @@ const STANDING = {
 } as const;
 
 /** The report as a terminal shows it: what is open first, then the sheet in its own order. */
-export function reportText(report: Report, paint: Paint): string {
+export function reportText(written: Report, paint: Paint): string {
+  const report = harmless(written);
   const parts = [
     titleLines(report, paint),
     holdLines(report, paint),

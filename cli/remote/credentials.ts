@@ -15,10 +15,18 @@ export const DEFAULT_SERVER = 'http://127.0.0.1:5181';
 export async function readCredentials(at: Surroundings): Promise<Credentials | null> {
   const { ANTINODE_TOKEN: token, ANTINODE_SERVER: server } = at.env;
   if (token !== undefined && token !== '') return { token, server: server ?? DEFAULT_SERVER };
-  const text = await readFile(credentialsFile(at), 'utf8').catch(() => null);
-  if (text === null) return null;
-  const stored = JSON.parse(text) as Credentials;
-  return { ...stored, server: server ?? stored.server };
+  const stored = parseCredentials(await readFile(credentialsFile(at), 'utf8').catch(() => ''));
+  return stored === null ? null : { ...stored, server: server ?? stored.server };
+}
+
+/** A file that is damaged counts as none: signing in writes it anew. */
+function parseCredentials(text: string): Credentials | null {
+  try {
+    const { server, token } = JSON.parse(text) as Partial<Credentials>;
+    return typeof server === 'string' && typeof token === 'string' ? { server, token } : null;
+  } catch {
+    return null;
+  }
 }
 
 export async function requireCredentials(at: Surroundings): Promise<Credentials> {

@@ -5,7 +5,9 @@ import type { InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { toSi } from '../units/convert.ts';
 import { inSystem } from '../units/display.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
-import { PRESSURE, sameDimension } from '../units/dimensions.ts';
+import type { QuantityType } from '../units/dimension.ts';
+import { describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
+import { article } from '../units/type-algebra.ts';
 import type { Override } from './request.ts';
 
 /** A value as typed: its number keeps its spelling as long as it is shown in the unit it was typed in. */
@@ -52,10 +54,27 @@ export function readInputs(
     const override = set.get(node.name.text);
     const written = override === undefined ? node : { ...node, value: overrideText(node.name.text, override) };
     const read = readValue(written.value, atmosphere, units);
-    diagnostics.push(...read.diagnostics);
-    if (read.value !== undefined) inputs.set(node.name.text, evaluatedInput(written, read.value));
+    const misfit = override === undefined ? [] : overrideMisfit(node, written.value, read.value);
+    diagnostics.push(...read.diagnostics, ...misfit);
+    // A misfit is left out, or every formula that uses it would be reported as well.
+    if (read.value !== undefined && misfit.length === 0)
+      inputs.set(node.name.text, evaluatedInput(written, read.value));
   }
   return { inputs, diagnostics };
+}
+
+/** The formulas were written for the value in the sheet, so what stands in its place must be of the same kind. */
+function overrideMisfit(node: InputNode, override: Text, set: TypedValue | undefined): Diagnostic[] {
+  const inSheet = parseQuantity(node.value.text, node.value.span).value?.unit;
+  if (inSheet === undefined || set === undefined || isSameKind(inSheet, set.type)) return [];
+  const message = `\`${node.name.text}\` is ${article(describeType(inSheet))}, and ${article(describeType(set.type))} is given`;
+  const label = { span: node.value.span, text: `the sheet has \`${node.value.text}\`` };
+  return [error('OVERRIDE', override.span, message, { labels: [label] })];
+}
+
+/** K and degR may stand for a level as well as for a difference. */
+function isSameKind(a: QuantityType, b: QuantityType): boolean {
+  return sameDimension(a.dimension, b.dimension) && (a.kind === b.kind || a.kind === 'open' || b.kind === 'open');
 }
 
 function evaluatedInput(node: InputNode, { typedNumber, ...value }: TypedValue): EvaluatedInput {

@@ -102,7 +102,10 @@ const FAULTS: readonly Fault[] = [
       'units: us',
       'assumptions:',
       `  - &a0 ${HERE}"ha"`,
-      ...Array.from({ length: 12 }, (_, i) => `  - &a${i + 1} [${Array.from({ length: 10 }, () => `*a${i}`).join(', ')}]`),
+      ...Array.from(
+        { length: 12 },
+        (_, i) => `  - &a${i + 1} [${Array.from({ length: 10 }, () => `*a${i}`).join(', ')}]`,
+      ),
     ),
   },
   {

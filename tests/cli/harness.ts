@@ -85,10 +85,20 @@ export function runBuilt(args: readonly string[], cwd: string): Promise<Ended> {
   return runProcess(process.execPath, [BUILT_MAIN, ...args], cwd);
 }
 
+/** Runs the built program with a reader that closes the pipe after some bytes; the status is that of the program. */
+export function runBuiltInto(reader: string, args: readonly string[], cwd: string): Promise<Ended> {
+  const pipe = `set -o pipefail; "$0" "$@" | ${reader}`;
+  return runProcess('bash', ['-c', pipe, process.execPath, BUILT_MAIN, ...args], cwd);
+}
+
 function runProcess(file: string, args: readonly string[], cwd: string): Promise<Ended> {
   return new Promise((resolve, reject) => {
     const written = { out: '', err: '' };
-    const child = spawn(file, args, { cwd, env: { PATH: process.env['PATH'], HOME: cwd }, stdio: ['ignore', 'pipe', 'pipe'] });
+    const child = spawn(file, args, {
+      cwd,
+      env: { PATH: process.env['PATH'], HOME: cwd },
+      stdio: ['ignore', 'pipe', 'pipe'],
+    });
     child.stdout.setEncoding('utf8').on('data', (text: string) => (written.out += text));
     child.stderr.setEncoding('utf8').on('data', (text: string) => (written.err += text));
     child.once('error', reject);
