@@ -88,7 +88,7 @@ class Typesetter {
     const mathFunction = MATHEMATICS.get(call.function);
     if (mathFunction !== undefined) return piece(mathFunction.tex(args), 'whole');
     const head = functionHead(this.options.functions.get(call.function)?.symbol ?? call.function);
-    return piece(`${head}\\left(${args.join(',\\ ')}\\right)`, 'whole');
+    return piece(`${head}${bracketed(args)}`, 'whole');
   }
 }
 
@@ -113,4 +113,10 @@ const ESCAPES: Readonly<Record<string, string>> = {
 /** A quoted text, upright, with every character that TeX would read as a sign of its own made harmless. */
 function textTex(value: string): string {
   return `\\text{${value.replace(/[\\~^{}$#%&_]/g, (character) => ESCAPES[character] ?? `\\${character}`)}}`;
+}
+
+/** Arguments in brackets. Flat ones may break after a comma, which TeX allows only outside of growing brackets. */
+function bracketed(args: readonly string[]): string {
+  const isTall = args.some((argument) => argument.includes('\\frac'));
+  return isTall ? `\\left(${args.join(',\\ ')}\\right)` : `(${args.join(',\\allowbreak\\ ')})`;
 }

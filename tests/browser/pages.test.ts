@@ -12,7 +12,7 @@ const PAGES = [
   ['revision', '/studies/th-3/sheets/TH3-C-104/A', 'Second-stage discharge lateral, shaking force'],
   ['newest revision', '/studies/th-3/sheets/TH3-C-104', 'Second-stage discharge lateral, shaking force'],
   ['tokens', '/account/tokens', 'Personal tokens'],
-  ['device', '/device', 'command line'],
+  ['device', '/device', 'Sign in a terminal'],
   ['verify', '/verify', 'Verify'],
 ] as const;
 
