@@ -2,7 +2,7 @@
  * Builds everything that runs: schema validators, the command line, the server with its evaluation worker, the report
  * stylesheet, and the web viewer. `--if-stale` does nothing when no source is newer than the last build.
  */
-import { cp, mkdir, readdir, stat, writeFile } from 'node:fs/promises';
+import { cp, mkdir, readdir, rm, stat, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { build as esbuild, type BuildOptions } from 'esbuild';
 import { build as viteBuild } from 'vite';
@@ -47,6 +47,8 @@ async function buildAll(): Promise<void> {
 }
 
 async function buildCli(): Promise<void> {
+  // Names of chunks carry a digest, so those of earlier builds would stay.
+  await rm(join(root, 'dist/cli'), { recursive: true, force: true });
   await esbuild({
     ...node,
     entryPoints: ['cli/main.ts'],

@@ -71,9 +71,18 @@ interface Conversion {
 
 function conversions({ number, unit }: ParsedQuantity): Conversion[] {
   const si = toSi(number, unit, STANDARD_ATMOSPHERE);
-  return ALL_UNITS.filter((other) => sameDimension(other.dimension, unit.dimension) && other.kind === unit.kind).map(
-    (other) => ({ unit: other.text, value: fromSi(si, other, STANDARD_ATMOSPHERE) }),
+  return ALL_UNITS.filter((other) => sameDimension(other.dimension, unit.dimension) && reads(other, unit)).map(
+    (other) => ({
+      unit: other.text,
+      value: fromSi(si, other, STANDARD_ATMOSPHERE),
+    }),
   );
+}
+
+/** Whether a value in one unit can be said in the other; K and degR are read as levels here. */
+function reads(a: Unit, b: Unit): boolean {
+  const kindOf = ({ kind }: Unit): Unit['kind'] => (kind === 'open' ? 'level' : kind);
+  return kindOf(a) === kindOf(b);
 }
 
 function conversionText(

@@ -1,6 +1,6 @@
 import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import { nearest } from '../diagnostics/nearest.ts';
-import type { EvaluatedInput, Value } from '../report/evaluated-sheet.ts';
+import type { EvaluatedInput, TypedNumber, Value } from '../report/evaluated-sheet.ts';
 import type { InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { toSi } from '../units/convert.ts';
 import { inSystem } from '../units/display.ts';
@@ -11,7 +11,7 @@ import { article } from '../units/type-algebra.ts';
 import type { Override } from './request.ts';
 
 /** A value as typed: its number keeps its spelling as long as it is shown in the unit it was typed in. */
-export type TypedValue = Value & { readonly typedNumber: string | null };
+export type TypedValue = Value & { readonly typed: TypedNumber | null };
 
 /** Stands as the file's name in the place of a diagnostic about a value set from outside the sheet. */
 export const overrideFile = (name: string): string => `--set ${name}`;
@@ -77,21 +77,21 @@ function isSameKind(a: QuantityType, b: QuantityType): boolean {
   return sameDimension(a.dimension, b.dimension) && (a.kind === b.kind || a.kind === 'open' || b.kind === 'open');
 }
 
-function evaluatedInput(node: InputNode, { typedNumber, ...value }: TypedValue): EvaluatedInput {
-  return { node, value, typedNumber };
+function evaluatedInput(node: InputNode, { typed, ...value }: TypedValue): EvaluatedInput {
+  return { node, value, typed };
 }
 
 function readValue(text: Text, atmosphere: number | undefined, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
-  const { value: typed, diagnostics } = parseQuantity(text.text, text.span);
-  if (typed === undefined) return { diagnostics };
-  if (typed.unit.gauge && atmosphere === undefined) {
-    return { diagnostics: [...diagnostics, missingAtmosphere(text.span, typed.unit.text)] };
+  const { value: read, diagnostics } = parseQuantity(text.text, text.span);
+  if (read === undefined) return { diagnostics };
+  if (read.unit.gauge && atmosphere === undefined) {
+    return { diagnostics: [...diagnostics, missingAtmosphere(text.span, read.unit.text)] };
   }
-  const si = toSi(typed.number, typed.unit, atmosphere);
-  const type = { dimension: typed.unit.dimension, kind: typed.unit.kind };
-  const unit = units === undefined ? typed.unit : inSystem(typed.unit, units);
-  const typedNumber = unit.text === typed.unit.text ? typed.numberText : null;
-  return { value: { type, si, unit, typedNumber }, diagnostics };
+  const si = toSi(read.number, read.unit, atmosphere);
+  const type = { dimension: read.unit.dimension, kind: read.unit.kind };
+  const unit = units === undefined ? read.unit : inSystem(read.unit, units);
+  const typed = unit.text === read.unit.text ? { number: read.number, text: read.numberText } : null;
+  return { value: { type, si, unit, typed }, diagnostics };
 }
 
 function missingAtmosphere(span: Span, unit: string): Diagnostic {

@@ -10,7 +10,7 @@ import {
   type Draft,
   type DraftContext,
 } from './draft.ts';
-import type { EvaluatedGas, EvaluatedInput, Value } from './evaluated-sheet.ts';
+import type { EvaluatedGas, EvaluatedInput, TypedNumber, Value } from './evaluated-sheet.ts';
 
 /** The atmosphere is a block of its own: every gauge reading rests on it, so a checker must be able to tick it. */
 export function atmosphereDraft(text: Text, context: DraftContext): Draft[] {
@@ -25,7 +25,7 @@ export function atmosphereDraft(text: Text, context: DraftContext): Draft[] {
         label: 'Atmospheric pressure',
         symbol: 'p_{\\mathrm{atm}}',
         typed: text.text,
-        printed: printInput(atmosphere, atmosphere.typedNumber, undefined, context),
+        printed: printInput(atmosphere, atmosphere.typed, undefined, context),
         place: place(text, context),
       },
       content: { block: 'atmosphere', value: plainText(text.text) },
@@ -35,7 +35,7 @@ export function atmosphereDraft(text: Text, context: DraftContext): Draft[] {
 }
 
 export function inputDraft(input: EvaluatedInput, context: DraftContext): Draft {
-  const { node, value, typedNumber } = input;
+  const { node, value, typed } = input;
   const name = node.name.text;
   return {
     block: {
@@ -45,7 +45,7 @@ export function inputDraft(input: EvaluatedInput, context: DraftContext): Draft 
       ...annotations(node, name, context),
       symbol: context.symbolOf(name),
       typed: node.value.text,
-      printed: printInput(value, typedNumber, node.digits, context),
+      printed: printInput(value, typed, node.digits, context),
       ...(node.hold === undefined ? {} : { hold: node.hold.text }),
       place: place(node.name, context),
     },
@@ -63,11 +63,11 @@ export function inputDraft(input: EvaluatedInput, context: DraftContext): Draft 
 /** An input keeps the digits it was typed with, as long as it is shown in the unit it was typed in. */
 export function printInput(
   value: Value,
-  typedNumber: string | null,
+  typed: TypedNumber | null,
   digits: number | undefined,
   context: DraftContext,
 ): Printed {
-  if (typedNumber !== null && digits === undefined) return printTyped(typedNumber, value.unit);
+  if (typed !== null && digits === undefined) return printTyped(typed.text, value.unit);
   return printQuantity(value.si, value.unit, printOptions(digits, context));
 }
 

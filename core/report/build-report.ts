@@ -94,20 +94,18 @@ function collectQuantities(sheet: EvaluatedSheet, blocks: readonly Block[]): Rec
   for (const block of blocks) {
     // The atmosphere is a block, but not a name of the sheet.
     if ((block.block !== 'input' && block.block !== 'step') || block.path === ATMOSPHERE_PATH) continue;
-    const value = (sheet.inputs.get(block.name) ?? sheet.steps.get(block.name))?.value;
+    const input = sheet.inputs.get(block.name);
+    const value = (input ?? sheet.steps.get(block.name))?.value;
     if (value === undefined) throw new Error(`no value for ${block.path}`);
-    quantities[block.name] = quantity(block, value, sheet.atmosphere?.si);
+    const number = input?.typed?.number ?? fromSi(value.si, value.unit, sheet.atmosphere?.si);
+    quantities[block.name] = quantity(block, value, number);
   }
   return quantities;
 }
 
-function quantity(
-  block: Extract<Block, { block: 'input' | 'step' }>,
-  value: Value,
-  atmosphere: number | undefined,
-): Quantity {
+function quantity(block: Extract<Block, { block: 'input' | 'step' }>, value: Value, number: number): Quantity {
   return {
-    value: fromSi(value.si, value.unit, atmosphere),
+    value: number,
     unit: value.unit.text,
     si: value.si,
     dimension: describeType(value.type),

@@ -12,11 +12,17 @@ export interface Value {
   readonly unit: Unit;
 }
 
+/** A number as it was typed: no conversion to SI and back may change a digit of it. */
+export interface TypedNumber {
+  readonly number: number;
+  readonly text: string;
+}
+
 export interface EvaluatedInput {
   readonly node: InputNode;
   readonly value: Value;
-  /** The number as typed; null where it is shown in another unit than it was typed in. */
-  readonly typedNumber: string | null;
+  /** Null where the value is shown in another unit than it was typed in. */
+  readonly typed: TypedNumber | null;
 }
 
 export interface EvaluatedStep {
@@ -42,7 +48,7 @@ export interface EvaluatedGas {
 export interface EvaluatedSheet {
   readonly document: SheetDocument;
   readonly units: 'us' | 'si';
-  readonly atmosphere: (Value & { readonly typedNumber: string | null }) | null;
+  readonly atmosphere: (Value & { readonly typed: TypedNumber | null }) | null;
   readonly gases: readonly EvaluatedGas[];
   readonly inputs: ReadonlyMap<string, EvaluatedInput>;
   readonly steps: ReadonlyMap<string, EvaluatedStep>;

@@ -101,7 +101,7 @@ function printedValue(name: string, context: DraftContext): Printed | undefined 
   const value = (input ?? step)?.value;
   if (value === undefined) return undefined;
   const digits = (input ?? step)?.node.digits;
-  if (input !== undefined && !value.unit.gauge) return printInput(value, input.typedNumber, digits, context);
+  if (input !== undefined && !value.unit.gauge) return printInput(value, input.typed, digits, context);
   return printQuantity(value.si, absoluteUnit(value.unit), printOptions(digits, context));
 }
 

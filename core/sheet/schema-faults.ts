@@ -111,7 +111,9 @@ function missingKey(key: string, { keySpan, schema, name }: Found): Diagnostic {
   return error('SCHEMA_MISSING_KEY', keySpan, `${where} has no \`${key}\``, { hints });
 }
 
-function wrongType({ entry, schema, name, keySpan }: Found): Diagnostic {
+function wrongType({ entry, schema, name, keySpan }: Found): Diagnostic | null {
+  // A number that cannot be held has been reported as such where it was read.
+  if (entry.entry === 'scalar' && typeof entry.value === 'number' && !Number.isFinite(entry.value)) return null;
   const isEmpty = entry.entry === 'scalar' && entry.value === null;
   const what = name === '' ? 'the sheet' : `\`${name}\``;
   if (isEmpty) return error('SCHEMA_TYPE', keySpan, `${what} is empty`, { hints: example(schema) });
