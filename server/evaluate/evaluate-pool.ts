@@ -43,21 +43,23 @@ export function makeEvaluatePool(limits: Partial<PoolLimits> = {}): EvaluatePool
     if (!ready && all.size >= threads) return;
     const job = queue.shift();
     if (!job) return;
-    const worker = ready ?? startWorker(megabytes);
-    all.add(worker);
+    const worker = ready ?? start();
     void runJob(worker, job, ready !== undefined, seconds).then((isSound) => {
-      if (isSound) keep(worker);
-      else all.delete(worker);
+      if (isSound) idle.push(worker);
+      else forget(worker);
       next();
     });
   };
 
-  const keep = (worker: Worker): void => {
-    idle.push(worker);
-    worker.once('exit', () => {
-      all.delete(worker);
-      if (idle.includes(worker)) idle.splice(idle.indexOf(worker), 1);
-    });
+  const start = (): Worker => {
+    const worker = startWorker(megabytes);
+    all.add(worker);
+    return worker.once('exit', () => forget(worker));
+  };
+
+  const forget = (worker: Worker): void => {
+    all.delete(worker);
+    if (idle.includes(worker)) idle.splice(idle.indexOf(worker), 1);
   };
 
   return {
