@@ -9,6 +9,7 @@ import type {
   ReportSection,
   StepBlock,
 } from '../../core/report/model.ts';
+import { ATMOSPHERE_PATH } from '../../core/report/draft.ts';
 import type { Paint } from '../terminal.ts';
 import { harmless } from './harmless.ts';
 import { count } from './print-diagnostics.ts';
@@ -94,10 +95,14 @@ function inputLines(blocks: readonly InputBlock[], paint: Paint): string[] {
   const name = widest(blocks.map((block) => block.name));
   const value = widest(blocks.map(({ printed }) => plain(printed)));
   return blocks.flatMap((block) => {
-    const origin = block.hold === undefined ? paint('dim', block.source ?? 'no source') : paint('yellow', '◔ hold');
+    const origin = block.hold === undefined ? paint('dim', originOf(block)) : paint('yellow', '◔ hold');
     const line = `   ${block.label.padEnd(label)}  ${block.name.padEnd(name)}  ${plain(block.printed).padStart(value)}  ${origin}`;
     return [line.trimEnd(), ...noteLines(block, paint)];
   });
+}
+
+function originOf({ path, source }: InputBlock): string {
+  return source ?? (path === ATMOSPHERE_PATH ? 'as this sheet states' : 'no source');
 }
 
 function stepLines(blocks: readonly StepBlock[], paint: Paint): string[] {
