@@ -40,6 +40,8 @@ export type Move = 'hand over' | 'close check' | 'approve' | 'return';
 export interface Health {
   readonly status: 'ok';
   readonly version: string;
+  /** Id of the key with which the server seals bundles; published here, so that who verifies one can compare it. */
+  readonly serverKey: string;
 }
 
 export interface Person {

@@ -46,7 +46,7 @@ function apiRoutes(context: Context): Router {
     next();
   });
   api.get('/health', (_request, response) => {
-    response.json({ status: 'ok', version: CORE_VERSION } satisfies Health);
+    response.json({ status: 'ok', version: CORE_VERSION, serverKey: context.serverKey.publicKey.kid } satisfies Health);
   });
   api.use(identify(context));
   api.use(refuseForgery(context));

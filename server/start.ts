@@ -12,6 +12,8 @@ import type { Context } from './services/context.ts';
 export interface RunningServer {
   /** Address under which it answers, without a slash at its end. */
   readonly url: string;
+  /** Id of the key with which it seals bundles: `verify --key` takes it. */
+  readonly serverKey: string;
   /** Sign-ins of the demo study; empty without `isDemo`. */
   readonly demo: readonly DemoPerson[];
   readonly stop: () => Promise<void>;
@@ -54,7 +56,7 @@ async function listen(
     await pool.stop();
     await database.close();
   };
-  return { url, demo, stop };
+  return { url, serverKey: serverKey.publicKey.kid, demo, stop };
 }
 
 function bind(server: Server, { host, port }: ServerConfig): Promise<AddressInfo> {

@@ -18,6 +18,7 @@ interface DemoPerson {
 
 interface Running {
   readonly url: string;
+  readonly serverKey: string;
   readonly demo: readonly DemoPerson[];
   readonly stop: () => Promise<void>;
 }
@@ -38,6 +39,7 @@ export async function serve(options: ServeOptions, at: Invocation): Promise<Exit
   const server = await loadServer();
   const running = await start(server, options, at);
   at.streams.out(`Antinode listens on ${at.paintOut('bold', running.url)}\n`);
+  at.streams.out(`Its bundles are sealed by the key ${running.serverKey} (antinode verify --key …)\n`);
   if (running.demo.length > 0) at.streams.out(demoText(running.demo));
   at.streams.err('Ctrl-C stops it.\n');
   await interrupted();

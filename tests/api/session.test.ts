@@ -22,7 +22,10 @@ function expectProblem({ status, headers, body, text }: Answer, wanted: number, 
 
 describe('health', () => {
   it('answers without a sign-in', async () => {
-    expect((await nobody.call('GET', '/health')).body).toMatchObject({ status: 'ok' });
+    expect((await nobody.call('GET', '/health')).body).toMatchObject({
+      status: 'ok',
+      serverKey: server.serverKey,
+    });
   });
 });
 

@@ -72,7 +72,7 @@ describe('the form for people', () => {
 
   it('sends no control character of a sheet to the terminal', () => {
     const text = 'a: \u001b[31mred\u0007';
-     
+
     expect(renderDiagnostic(located(text, 3, 8))).not.toMatch(/[\u0000-\u0009\u000b-\u001f\u007f]/);
   });
 
