@@ -9,7 +9,8 @@ export default defineConfig({
     host: '127.0.0.1',
     port: 5180,
     strictPort: true,
-    proxy: { '/api': 'http://127.0.0.1:5181' },
+    // The server compares a request's origin with its host, so the host must stay the one of the page.
+    proxy: { '/api': { target: 'http://127.0.0.1:5181', changeOrigin: false } },
   },
   build: { outDir: '../dist/web', emptyOutDir: true, target: 'es2022', assetsInlineLimit: 0 },
 });
