@@ -1,7 +1,7 @@
 import { error, type Diagnosed, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import { parseComparison, parseFormula } from '../expression/parse-formula.ts';
 import type { Comparison, Formula } from '../expression/tree.ts';
-import { unknownUnit } from '../expression/unknown-unit.ts';
+import { unknownUnit } from '../units/unknown-unit.ts';
 import type { CheckNode, SheetDocument, StepNode, Text } from '../sheet/document.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 

@@ -1,4 +1,4 @@
-import { power } from '../numeric/math.ts';
+import { arithmetic } from './arithmetic.ts';
 import { CONSTANTS } from './constants.ts';
 import type { Expression } from './tree.ts';
 
@@ -24,17 +24,5 @@ export function constantValue(expression: Expression): number | undefined {
 
 function constantOperation({ operator, left, right }: Expression & { node: 'binary' }): number | undefined {
   const [a, b] = [constantValue(left), constantValue(right)];
-  if (a === undefined || b === undefined) return undefined;
-  switch (operator) {
-    case '+':
-      return a + b;
-    case '-':
-      return a - b;
-    case '*':
-      return a * b;
-    case '/':
-      return a / b;
-    case '^':
-      return power(a, b);
-  }
+  return a === undefined || b === undefined ? undefined : arithmetic(operator, a, b);
 }

@@ -5,7 +5,7 @@ import { scanTokens, type Scan } from './scan-tokens.ts';
 import { spanIn, type SourceText } from './source-text.ts';
 import type { Token } from './token.ts';
 import type { Comparison, Formula } from './tree.ts';
-import { unknownUnit } from './unknown-unit.ts';
+import { unknownUnit } from '../units/unknown-unit.ts';
 
 /**
  * Reads a formula: an expression, and at its end `to UNIT` where the result is to be shown in a certain unit.

@@ -1,5 +1,5 @@
 import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
-import { power } from '../numeric/math.ts';
+import { arithmetic } from './arithmetic.ts';
 import type { ArithmeticInstruction, Instruction, MathInstruction, Program } from './program.ts';
 import { callLibrary } from './run-library.ts';
 import { noticeDiagnostics, notFinite } from './notices.ts';
@@ -69,21 +69,6 @@ function calculate(instruction: ArithmeticInstruction, state: State): number {
   if (Number.isFinite(result)) return result;
   state.diagnostics.push(notFinite(instruction.span));
   return Number.NaN;
-}
-
-function arithmetic(op: ArithmeticInstruction['op'], a: number, b: number): number {
-  switch (op) {
-    case '+':
-      return a + b;
-    case '-':
-      return a - b;
-    case '*':
-      return a * b;
-    case '/':
-      return a / b;
-    case '^':
-      return power(a, b);
-  }
 }
 
 function operandFault(instruction: ArithmeticInstruction, a: number, b: number, state: State): Diagnostic | null {

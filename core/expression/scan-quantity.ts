@@ -6,7 +6,7 @@ import { CONSTANTS } from './constants.ts';
 import { MATHEMATICS } from './mathematics.ts';
 import { spanIn, type SourceText } from './source-text.ts';
 import type { Token } from './token.ts';
-import { unknownUnit } from './unknown-unit.ts';
+import { unknownUnit } from '../units/unknown-unit.ts';
 
 /** A number or a quantity literal, or what is wrong with it; either way scanning goes on at `end`. */
 export type NumberScan = { readonly end: number } & ({ readonly token: Token } | { readonly fault: Diagnostic });

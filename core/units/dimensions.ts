@@ -74,22 +74,27 @@ const BASE_SYMBOLS = ['m', 'kg', 's', 'K', 'mol'] as const;
 /** Exponents come out of sums of fractions such as 1/3, so they are compared within this. */
 const EXPONENT_TOLERANCE = 1e-9;
 
+/** Whether two dimensions have the same exponents, within the rounding of fractions. */
 export function sameDimension(a: Dimension, b: Dimension): boolean {
   return a.every((exponent, i) => Math.abs(exponent - (b[i] ?? 0)) < EXPONENT_TOLERANCE);
 }
 
+/** Whether a dimension is that of a plain number. */
 export function isNumber(dimension: Dimension): boolean {
   return sameDimension(dimension, NUMBER);
 }
 
+/** Dimension of a product. */
 export function multiplyDimensions(a: Dimension, b: Dimension): Dimension {
   return [a[0] + b[0], a[1] + b[1], a[2] + b[2], a[3] + b[3], a[4] + b[4]];
 }
 
+/** Dimension of a quotient. */
 export function divideDimensions(a: Dimension, b: Dimension): Dimension {
   return [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3], a[4] - b[4]];
 }
 
+/** Dimension of a power; `n` may be a fraction, as in a root. */
 export function powerDimension(a: Dimension, n: number): Dimension {
   return [a[0] * n, a[1] * n, a[2] * n, a[3] * n, a[4] * n];
 }

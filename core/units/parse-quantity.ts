@@ -1,7 +1,8 @@
 import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import { leadingNumber, type NumberFault } from './parse-number.ts';
-import { parseUnit, suggestUnits } from './parse-unit.ts';
+import { parseUnit } from './parse-unit.ts';
 import type { Unit } from './unit.ts';
+import { unknownUnit } from './unknown-unit.ts';
 
 export interface ParsedQuantity {
   readonly number: number;
@@ -102,12 +103,7 @@ function notANumber(text: string, within: Within): Diagnostic {
   });
 }
 
-function unknownUnit(text: string, span: Span): Diagnostic {
-  const near = suggestUnits(text);
-  const hint = near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : '`antinode units` lists all units';
-  return error('UNIT_UNKNOWN', span, `\`${clip(text)}\` is not a unit`, { hints: [hint] });
-}
-
+/** Why a number cannot be held, at its place. */
 export function numberFault(fault: NumberFault, span: Span): Diagnostic {
   switch (fault) {
     case 'infinite':

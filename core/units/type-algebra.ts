@@ -275,6 +275,7 @@ function ok(dimension: Dimension, kind: Kind): TypeResult {
   return { type: { dimension, kind } };
 }
 
+/** A noun with its article: `a force`, `an angle`. */
 export function article(noun: string): string {
   return `${/^[aeiou]/.test(noun) ? 'an' : 'a'} ${noun}`;
 }
