@@ -31,7 +31,10 @@ export function suggestUnits(text: string): string[] {
   if (slip !== undefined) return [...slip];
   const power = /^([A-Za-z]+)([234])$/.exec(text.trim());
   if (power?.[1] !== undefined && namedUnit(power[1]) !== undefined) return [`${power[1]}^${power[2]}`];
-  return nearest(text.trim(), UNIT_NAMES, 3);
+  const near = nearest(text.trim(), UNIT_NAMES, 3);
+  // Where only capitals differ, nothing else was meant.
+  const sameLetters = near.filter((name) => name.toLowerCase() === text.trim().toLowerCase());
+  return sameLetters.length > 0 ? sameLetters : near;
 }
 
 const SLIPS: ReadonlyMap<string, readonly string[]> = new Map([
