@@ -105,12 +105,19 @@ function originOf({ path, source }: InputBlock): string {
   return source ?? (path === ATMOSPHERE_PATH ? 'as this sheet states' : 'no source');
 }
 
+/** A step without a label of its own is called by its name, which the formula says already. */
+function stepLabel({ label, name }: StepBlock): string {
+  return label === name ? '' : label;
+}
+
 function stepLines(blocks: readonly StepBlock[], paint: Paint): string[] {
-  const label = widest(blocks.map((block) => block.label));
+  const width = widest(blocks.map(stepLabel));
+  const margin = width === 0 ? '   ' : `   ${' '.repeat(width)}  `;
   return blocks.flatMap((block) => {
     const calc = block.calc.replace(/\s+to\s+\S+$/, '');
     const formula = `${block.name} = ${paint('dim', calc)} = ${paint('bold', plain(block.printed))}`;
-    return [`   ${block.label.padEnd(label)}  ${formula}`, ...noteLines(block, paint)];
+    const label = `   ${stepLabel(block).padEnd(width)}  `;
+    return [`${label.slice(0, margin.length)}${formula}`, ...noteLines(block, paint)];
   });
 }
 
@@ -136,13 +143,15 @@ function noteLines(block: Block, paint: Paint): string[] {
 
 function summaryLines({ summary }: Report, paint: Paint): string[] {
   const { passed, failed, holds, governing } = summary;
-  const checks =
-    failed > 0
-      ? paint('red', `${count(failed, 'check')} of ${passed + failed} over`)
-      : `${count(passed, 'check')} pass`;
+  const checks = failed > 0 ? paint('red', `${count(failed, 'check')} of ${passed + failed} over`) : passWords(passed);
   const governs = governing === null ? [] : [`governs ${governing.utilisation.toFixed(2)} ${governing.label}`];
   const open = holds > 0 ? [paint('yellow', `${count(holds, 'hold')} open`)] : [];
   return [[checks, ...governs, ...open].join(' · ')];
+}
+
+function passWords(passed: number): string {
+  if (passed === 0) return 'no checks';
+  return `${count(passed, 'check')} ${passed === 1 ? 'passes' : 'pass'}`;
 }
 
 /** Prose as it was typed; each paragraph is filled anew. */

@@ -41,7 +41,9 @@ function convertLevel(from: QuantityType, unit: Unit): ConversionResult {
     return fault(
       'DIFFERENCE_WANTED',
       `a ${name} level cannot be shown in \`${unit.text}\`, a unit of ${name} differences`,
-      [`show it in a unit of levels (${levelUnits(dimension)}), or subtract another level first`],
+      [
+        `show it in a unit of levels (${levelUnits(dimension)}), or subtract another level first; a share of a level is a difference when it is written in percent (\`2.4 %\`)`,
+      ],
     );
   }
   return same({ dimension, kind: unit.kind === 'open' ? from.kind : unit.kind });

@@ -14,7 +14,8 @@ export const StepView = memo(function StepView({ block, isCurrent, shared }: Blo
   return (
     <Frame block={block} isCurrent={isCurrent} shared={shared} className="an-step">
       <div className="an-step-head">
-        <span className="an-label">{block.label}</span>
+        {/* A step without a label of its own is called by its name, which the formula says already. */}
+        <span className="an-label">{block.label === block.name ? '' : block.label}</span>
         {source !== '' && <span className="an-source">{source}</span>}
       </div>
       <StepLine block={block} />
