@@ -5,13 +5,14 @@ import { parseQuantity, type ParsedQuantity } from '../../core/units/parse-quant
 import { parseUnit } from '../../core/units/parse-unit.ts';
 import { printNumber } from '../../core/units/print.ts';
 import { ALL_UNITS } from '../../core/units/table.ts';
+import type { Site } from '../../core/units/site.ts';
 import type { Unit } from '../../core/units/unit.ts';
 import { EXIT, type ExitStatus } from '../exit-status.ts';
 import { diagnosticsText } from '../output/print-diagnostics.ts';
 import type { Invocation } from '../program.ts';
 
 /** Without a sheet, gauge readings are read against the standard atmosphere, and the answer says so. */
-const STANDARD_ATMOSPHERE = 101_325;
+const SITE: Site = { atmosphere: 101_325 };
 
 /** The table of units, or what one value is in the other units of its kind. */
 export function units(
@@ -70,11 +71,11 @@ interface Conversion {
 }
 
 function conversions({ number, unit }: ParsedQuantity): Conversion[] {
-  const si = toSi(number, unit, STANDARD_ATMOSPHERE);
+  const si = toSi(number, unit, SITE);
   return ALL_UNITS.filter((other) => sameDimension(other.dimension, unit.dimension) && reads(other, unit)).map(
     (other) => ({
       unit: other.text,
-      value: fromSi(si, other, STANDARD_ATMOSPHERE),
+      value: fromSi(si, other, SITE),
     }),
   );
 }

@@ -2,6 +2,7 @@ import { LIBRARY } from '../library/catalogue.ts';
 import type { EvaluatedCheck, EvaluatedSheet, EvaluatedStep } from '../report/evaluated-sheet.ts';
 import type { CheckNode, SheetDocument } from '../sheet/document.ts';
 import { displayUnit, inSystem } from '../units/display.ts';
+import type { Site } from '../units/site.ts';
 import type { Unit } from '../units/unit.ts';
 import type { TypedSheet } from './check-types.ts';
 import type { Computed } from './compute.ts';
@@ -16,6 +17,7 @@ export interface Parts {
   /** Set when results are to be shown in another system than the sheet's own. */
   readonly shownIn: 'us' | 'si' | undefined;
   readonly atmosphere: TypedValue | undefined;
+  readonly site: Site;
   readonly inputs: Inputs;
   readonly gases: Gases;
   readonly formulas: ReadFormulas;
@@ -29,6 +31,7 @@ export function assembleSheet(parts: Parts): EvaluatedSheet {
     document: parts.document,
     units: parts.units,
     atmosphere: parts.atmosphere ?? null,
+    site: parts.site,
     gases: [...parts.gases.gases.values()],
     inputs: parts.inputs.inputs,
     steps: assembleSteps(parts),

@@ -6,6 +6,7 @@ import type { GasModel } from '../gas/gas-model.ts';
 import type { LibraryFunction } from '../library/function.ts';
 import type { CheckNode } from '../sheet/document.ts';
 import type { TypedSheet } from './check-types.ts';
+import type { Site } from '../units/site.ts';
 import { judge, type Judgement } from './judge-check.ts';
 
 /** What formulas are evaluated with. */
@@ -14,8 +15,7 @@ export interface Givens {
   readonly inputs: ReadonlyMap<string, number>;
   readonly gases: ReadonlyMap<string, GasModel>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
-  /** Absolute, Pa. */
-  readonly atmosphere: number | undefined;
+  readonly site: Site;
 }
 
 export interface Computed {
@@ -48,11 +48,11 @@ class Machine {
   private readonly values: Float64Array;
   private readonly context: CompileContext;
 
-  constructor(sheet: TypedSheet, { inputs, gases, functions, atmosphere }: Givens) {
+  constructor(sheet: TypedSheet, { inputs, gases, functions, site }: Givens) {
     this.slots = new Map([...inputs.keys(), ...sheet.steps.keys()].map((name, slot) => [name, slot]));
     this.values = new Float64Array(this.slots.size);
     for (const [name, value] of inputs) this.store(name, value);
-    this.context = { slots: this.slots, gases, functions, ...(atmosphere === undefined ? {} : { atmosphere }) };
+    this.context = { slots: this.slots, gases, functions, site };
   }
 
   store(name: string, value: number): void {

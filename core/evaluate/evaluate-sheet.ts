@@ -5,6 +5,7 @@ import { buildReport } from '../report/build-report.ts';
 import type { EvaluatedSheet } from '../report/evaluated-sheet.ts';
 import type { SheetDocument } from '../sheet/document.ts';
 import { parseSheet } from '../sheet/parse-sheet.ts';
+import type { Site } from '../units/site.ts';
 import { assembleSheet } from './assemble-sheet.ts';
 import { checkLabels } from './check-labels.ts';
 import { checkTypes } from './check-types.ts';
@@ -57,7 +58,8 @@ function evaluateDocument(
 ): Outcome {
   const units = request.units === document.units ? undefined : request.units;
   const atmosphere = readAtmosphere(document, units);
-  const inputs = readInputs(document, request.overrides ?? [], atmosphere.value?.si, units);
+  const site: Site = atmosphere.value === undefined ? {} : { atmosphere: atmosphere.value.si };
+  const inputs = readInputs(document, request.overrides ?? [], site, units);
   const gases = readGases(document);
   const formulas = readFormulas(document);
   const typed = checkTypes(formulas, {
@@ -75,7 +77,7 @@ function evaluateDocument(
     inputs: new Map([...inputs.inputs].map(([name, { value }]) => [name, value.si])),
     gases: new Map([...gases.gases].map(([name, { model }]) => [name, model])),
     functions: LIBRARY,
-    atmosphere: atmosphere.value?.si,
+    site,
   });
   const diagnostics = [...found, ...computed.diagnostics];
   if (hasErrors(diagnostics)) return { sheet: null, diagnostics };
@@ -84,6 +86,7 @@ function evaluateDocument(
     units: request.units ?? document.units,
     shownIn: units,
     atmosphere: atmosphere.value,
+    site,
     inputs,
     gases,
     formulas,

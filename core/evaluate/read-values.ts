@@ -7,6 +7,7 @@ import { inSystem } from '../units/display.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
+import { NO_SITE, type Site } from '../units/site.ts';
 import { article } from '../units/type-algebra.ts';
 import type { Override } from './request.ts';
 
@@ -20,7 +21,7 @@ export const overrideFile = (name: string): string => `--set ${name}`;
 export function readAtmosphere(document: SheetDocument, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
   const text = document.atmosphere;
   if (text === undefined) return { diagnostics: [] };
-  const read = readValue(text, undefined, units);
+  const read = readValue(text, NO_SITE, units);
   if (read.value === undefined) return read;
   const { type, si, unit } = read.value;
   if (!sameDimension(type.dimension, PRESSURE) || type.kind !== 'level' || unit.gauge) {
@@ -44,7 +45,7 @@ export interface Inputs {
 export function readInputs(
   document: SheetDocument,
   overrides: readonly Override[],
-  atmosphere: number | undefined,
+  site: Site,
   units: 'us' | 'si' | undefined,
 ): Inputs {
   const set = new Map(overrides.map(({ name, value }) => [name, value]));
@@ -53,7 +54,7 @@ export function readInputs(
   for (const node of document.inputs) {
     const override = set.get(node.name.text);
     const written = override === undefined ? node : { ...node, value: overrideText(node.name.text, override) };
-    const read = readValue(written.value, atmosphere, units);
+    const read = readValue(written.value, site, units);
     const misfit = override === undefined ? [] : overrideMisfit(node, written.value, read.value);
     diagnostics.push(...read.diagnostics, ...misfit);
     // A misfit is left out, or every formula that uses it would be reported as well.
@@ -81,13 +82,13 @@ function evaluatedInput(node: InputNode, { typed, ...value }: TypedValue): Evalu
   return { node, value, typed };
 }
 
-function readValue(text: Text, atmosphere: number | undefined, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
+function readValue(text: Text, site: Site, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
   const { value: read, diagnostics } = parseQuantity(text.text, text.span);
   if (read === undefined) return { diagnostics };
-  if (read.unit.gauge && atmosphere === undefined) {
+  if (read.unit.gauge && site.atmosphere === undefined) {
     return { diagnostics: [...diagnostics, missingAtmosphere(text.span, read.unit.text)] };
   }
-  const si = toSi(read.number, read.unit, atmosphere);
+  const si = toSi(read.number, read.unit, site);
   const type = { dimension: read.unit.dimension, kind: read.unit.kind };
   const unit = units === undefined ? read.unit : inSystem(read.unit, units);
   const typed = unit.text === read.unit.text ? { number: read.number, text: read.numberText } : null;

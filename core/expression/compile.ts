@@ -1,6 +1,7 @@
 import type { GasModel } from '../gas/gas-model.ts';
 import type { LibraryFunction, Parameter } from '../library/function.ts';
 import { toSi } from '../units/convert.ts';
+import type { Site } from '../units/site.ts';
 import { CONSTANTS } from './constants.ts';
 import { MATHEMATICS } from './mathematics.ts';
 import { visit } from './names.ts';
@@ -14,8 +15,7 @@ export interface CompileContext {
   readonly slots: ReadonlyMap<string, number>;
   readonly gases: ReadonlyMap<string, GasModel>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
-  /** Absolute, Pa; needed where a gauge pressure is written in a formula. */
-  readonly atmosphere?: number;
+  readonly site: Site;
 }
 
 /** Turns a checked expression into a flat program. What the check has let through cannot fail here. */
@@ -60,7 +60,7 @@ class Compiler {
       case 'number':
         return this.constant(expression.value);
       case 'quantity':
-        return this.constant(toSi(expression.number, expression.unit, this.context.atmosphere));
+        return this.constant(toSi(expression.number, expression.unit, this.context.site));
       case 'name':
         return this.name(expression.name);
       case 'negate':

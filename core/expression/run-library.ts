@@ -2,6 +2,7 @@ import { error, hasErrors, type Diagnostic, type Span } from '../diagnostics/dia
 import type { Argument, LibraryFunction, Parameter } from '../library/function.ts';
 import { fromSi } from '../units/convert.ts';
 import { parseUnit } from '../units/parse-unit.ts';
+import { NO_SITE } from '../units/site.ts';
 import { printNumber } from '../units/print.ts';
 import { noticeDiagnostics, notFinite } from './notices.ts';
 import type { LibraryInstruction } from './program.ts';
@@ -59,6 +60,6 @@ function rangeFault(value: number, parameter: Parameter, fn: LibraryFunction, sp
 function inUnit(si: number, { kind }: Parameter): string {
   const unit = kind.takes === 'quantity' ? parseUnit(kind.unit) : null;
   if (unit === null) return printNumber(si);
-  const number = printNumber(fromSi(si, unit, undefined));
+  const number = printNumber(fromSi(si, unit, NO_SITE));
   return unit.text === '1' ? number : `${number} ${unit.text}`;
 }

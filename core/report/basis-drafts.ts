@@ -1,4 +1,4 @@
-import { printQuantity, printTyped } from '../units/print.ts';
+import { printQuantity, printTyped, type PrintOptions } from '../units/print.ts';
 import type { Printed } from '../units/printed.ts';
 import type { Text } from '../sheet/document.ts';
 import {
@@ -74,9 +74,8 @@ export function printInput(
 export function printOptions(
   digits: number | undefined,
   context: DraftContext,
-): { digits?: number; atmosphere?: number } {
-  const atmosphere = context.sheet.atmosphere?.si;
-  return { ...(digits === undefined ? {} : { digits }), ...(atmosphere === undefined ? {} : { atmosphere }) };
+): PrintOptions {
+  return { ...(digits === undefined ? {} : { digits }), site: context.sheet.site };
 }
 
 export function gasDraft({ node, model }: EvaluatedGas, context: DraftContext): Draft {

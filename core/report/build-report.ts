@@ -97,7 +97,7 @@ function collectQuantities(sheet: EvaluatedSheet, blocks: readonly Block[]): Rec
     const input = sheet.inputs.get(block.name);
     const value = (input ?? sheet.steps.get(block.name))?.value;
     if (value === undefined) throw new Error(`no value for ${block.path}`);
-    const number = input?.typed?.number ?? fromSi(value.si, value.unit, sheet.atmosphere?.si);
+    const number = input?.typed?.number ?? fromSi(value.si, value.unit, sheet.site);
     quantities[block.name] = quantity(block, value, number);
   }
   return quantities;

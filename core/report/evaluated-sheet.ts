@@ -3,6 +3,7 @@ import type { GasModel } from '../gas/gas-model.ts';
 import type { LibraryFunction } from '../library/function.ts';
 import type { CheckNode, GasNode, InputNode, SheetDocument, StepNode } from '../sheet/document.ts';
 import type { QuantityType } from '../units/dimension.ts';
+import type { Site } from '../units/site.ts';
 import type { Unit } from '../units/unit.ts';
 
 /** A value with its type, and the unit in which it is shown. */
@@ -48,6 +49,7 @@ export interface EvaluatedGas {
 export interface EvaluatedSheet {
   readonly document: SheetDocument;
   readonly units: 'us' | 'si';
+  readonly site: Site;
   readonly atmosphere: (Value & { readonly typed: TypedNumber | null }) | null;
   readonly gases: readonly EvaluatedGas[];
   readonly inputs: ReadonlyMap<string, EvaluatedInput>;

@@ -1,23 +1,24 @@
+import type { Site } from './site.ts';
 import type { Unit } from './unit.ts';
 
 /**
  * SI value of a number in a unit. A gauge pressure needs the atmosphere, which the caller must have checked.
  *
- * @param number     in `unit`
- * @param unit       of the table or compound
- * @param atmosphere absolute, Pa; only gauge units use it
+ * @param number in `unit`
+ * @param unit   of the table or compound
+ * @param site   what the sheet states of its site; only units that rest on it use it
  * @returns SI value: absolute Pa for pressure levels, K for temperature levels
  */
-export function toSi(number: number, unit: Unit, atmosphere: number | undefined): number {
-  return number * unit.factor + unit.shift + gaugeShift(unit, atmosphere);
+export function toSi(number: number, unit: Unit, site: Site): number {
+  return number * unit.factor + unit.shift + gaugeShift(unit, site);
 }
 
 /** The number that a SI value has in a unit: the inverse of {@link toSi}. */
-export function fromSi(si: number, unit: Unit, atmosphere: number | undefined): number {
-  return (si - unit.shift - gaugeShift(unit, atmosphere)) / unit.factor;
+export function fromSi(si: number, unit: Unit, site: Site): number {
+  return (si - unit.shift - gaugeShift(unit, site)) / unit.factor;
 }
 
-function gaugeShift(unit: Unit, atmosphere: number | undefined): number {
+function gaugeShift(unit: Unit, { atmosphere }: Site): number {
   if (!unit.gauge) return 0;
   if (atmosphere === undefined) throw new Error(`no atmosphere for the gauge unit ${unit.text}`);
   return atmosphere;

@@ -1,5 +1,6 @@
 import { fromSi } from './convert.ts';
 import type { Printed } from './printed.ts';
+import { NO_SITE, type Site } from './site.ts';
 import type { Unit } from './unit.ts';
 
 /** Significant digits of a result, where the engineer asks for no other number. */
@@ -12,13 +13,12 @@ const LARGEST = 1e7;
 export interface PrintOptions {
   /** Significant digits, 1 to 15. */
   readonly digits?: number;
-  /** Absolute, Pa; for gauge units. */
-  readonly atmosphere?: number;
+  readonly site?: Site;
 }
 
 /** Prints a SI value in a unit at its significant digits; digits before the decimal sign are never rounded away. */
 export function printQuantity(si: number, unit: Unit, options: PrintOptions = {}): Printed {
-  const number = fromSi(si, unit, options.atmosphere);
+  const number = fromSi(si, unit, options.site ?? NO_SITE);
   return printed(printNumber(number, options.digits ?? DEFAULT_DIGITS), unit);
 }
 

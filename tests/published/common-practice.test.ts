@@ -39,6 +39,6 @@ describe('from pulsation to shaking force', () => {
     expect(diagnostics).toEqual([]);
     const unit = parseUnit(row.inputs.unit);
     if (unit === null) throw new Error(row.inputs.unit);
-    expectRow(fromSi(value, unit, undefined), row);
+    expectRow(fromSi(value, unit, {}), row);
   });
 });

@@ -79,7 +79,7 @@ describe('faults of values', () => {
   it('are silent where a value that is read is not known', () => {
     const typed = inferType(parsed('1/(n - n) + ln(n) + n'), scopeWith()).value;
     if (typed === undefined) throw new Error('no type');
-    const program = compile(typed, { slots: new Map([['n', 0]]), gases: new Map(), functions: new Map() });
+    const program = compile(typed, { slots: new Map([['n', 0]]), gases: new Map(), functions: new Map(), site: {} });
     expect(run(program, new Float64Array([Number.NaN]))).toEqual({ value: Number.NaN, diagnostics: [] });
   });
 });

@@ -28,7 +28,7 @@ export function parsed(text: string): Expression {
   return value.expression;
 }
 
-export const ATMOSPHERE = 101_325;
+export const SITE = { atmosphere: 101_325 };
 
 /** The quantities that formulas of these tests may use, as a sheet would give them. */
 export const QUANTITIES: Readonly<Record<string, string>> = {
@@ -56,7 +56,7 @@ const values = new Map(
     const quantity = parseQuantity(text, spanOf(text)).value;
     if (quantity === undefined) throw new Error(text);
     const type: QuantityType = { dimension: quantity.unit.dimension, kind: quantity.unit.kind };
-    return [name, { type, si: toSi(quantity.number, quantity.unit, ATMOSPHERE) }] as const;
+    return [name, { type, si: toSi(quantity.number, quantity.unit, SITE) }] as const;
   }),
 );
 
@@ -90,7 +90,7 @@ export function evaluate(text: string, functions: readonly LibraryFunction[] = [
     slots: new Map(names.map((name, slot) => [name, slot])),
     gases: new Map([['residue', RESIDUE]]),
     functions: new Map(functions.map((fn) => [fn.name, fn])),
-    atmosphere: ATMOSPHERE,
+    site: SITE,
   });
   const { value, diagnostics } = run(
     program,

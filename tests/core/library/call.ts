@@ -29,7 +29,7 @@ export function callFromSheet(text: string): CallOutcome {
   const typed = inferFormula(formula.value, scope);
   if (typed.value === undefined || hasErrors(typed.diagnostics)) return failed(typed.diagnostics);
   const { typed: expression, type, factor } = typed.value;
-  const program = compile(expression, { slots: new Map(), gases: GASES, functions: LIBRARY, atmosphere: 101_325 });
+  const program = compile(expression, { slots: new Map(), gases: GASES, functions: LIBRARY, site: { atmosphere: 101_325 } });
   const { value, diagnostics } = run(program, new Float64Array(0));
   return { value: value * factor, type, diagnostics: [...typed.diagnostics, ...diagnostics] };
 }
