@@ -24,12 +24,17 @@ interface Target {
 }
 
 export async function compileSchemas(): Promise<void> {
-  const [sheet, report, manifest, bundle] = await Promise.all(
-    ['sheet', 'report', 'manifest', 'bundle'].map((name) => readSchema(join('schemas', name + SUFFIX))),
+  const [sheet, definitions, report, manifest, bundle] = await Promise.all(
+    ['sheet', 'definitions', 'report', 'manifest', 'bundle'].map((name) => readSchema(join('schemas', name + SUFFIX))),
   );
-  if (!sheet || !report || !manifest || !bundle) throw new Error('a schema is missing');
+  if (!sheet || !definitions || !report || !manifest || !bundle) throw new Error('a schema is missing');
   const targets: Target[] = [
     { schema: sheet, name: 'validateSheet', module: 'core/sheet/generated/validate-sheet' },
+    {
+      schema: definitions,
+      name: 'validateDefinitions',
+      module: 'core/sheet/generated/validate-definitions',
+    },
     {
       schema: report,
       name: 'validateReport',
@@ -44,11 +49,11 @@ export async function compileSchemas(): Promise<void> {
     },
     ...(await apiTargets()),
   ];
-  const shared = [sheet, report, manifest, bundle];
+  const shared = [sheet, definitions, report, manifest, bundle];
   const key = await keyOf([...shared, ...targets.map((target) => target.schema)]);
   const current = await Promise.all(targets.map((target) => isCurrent(target, key)));
   await Promise.all([
-    writeSheetSchema(sheet),
+    writeSheetSchema(sheet, definitions),
     ...targets.filter((_, index) => !current[index]).map((target) => compile(target, shared, key)),
   ]);
 }
@@ -100,14 +105,17 @@ async function readSchema(path: string): Promise<AnySchemaObject> {
   return JSON.parse(await readFile(join(root, path), 'utf8')) as AnySchemaObject;
 }
 
-/** The sheet's schema as data: the words of its diagnostics (known keys, examples) come from it. */
-async function writeSheetSchema(sheet: AnySchemaObject): Promise<void> {
+/** The schemas of sheets and definitions as data: the words of its diagnostics (known keys, examples) come from it. */
+async function writeSheetSchema(sheet: AnySchemaObject, definitions: AnySchemaObject): Promise<void> {
   const module = 'core/sheet/generated/sheet-schema';
   await Promise.all([
-    writeIfChanged(`${module}.js`, `${HEADER}\nexport const SHEET_SCHEMA = ${JSON.stringify(sheet)};\n`),
+    writeIfChanged(
+      `${module}.js`,
+      `${HEADER}\nexport const SHEET_SCHEMA = ${JSON.stringify(sheet)};\nexport const DEFINITIONS_SCHEMA = ${JSON.stringify(definitions)};\n`,
+    ),
     writeIfChanged(
       `${module}.d.ts`,
-      `${HEADER}\nimport type { SchemaNode } from '../schema-node.ts';\n\nexport declare const SHEET_SCHEMA: SchemaNode;\n`,
+      `${HEADER}\nimport type { SchemaNode } from '../schema-node.ts';\n\nexport declare const SHEET_SCHEMA: SchemaNode;\nexport declare const DEFINITIONS_SCHEMA: SchemaNode;\n`,
     ),
   ]);
 }

@@ -1,7 +1,18 @@
+import type { AxisTable } from '../axes/axis.ts';
 import { LIBRARY } from '../library/catalogue.ts';
-import type { EvaluatedCheck, EvaluatedSheet, EvaluatedStep } from '../report/evaluated-sheet.ts';
-import type { CheckNode, SheetDocument } from '../sheet/document.ts';
+import type {
+  EvaluatedCheck,
+  EvaluatedColumn,
+  EvaluatedFigure,
+  EvaluatedLookup,
+  EvaluatedSheet,
+  EvaluatedStep,
+  EvaluatedTake,
+  Value,
+} from '../report/evaluated-sheet.ts';
+import type { CheckNode, FigureNode, SheetDocument } from '../sheet/document.ts';
 import { displayUnit, inSystem } from '../units/display.ts';
+import type { QuantityType } from '../units/dimension.ts';
 import type { Site } from '../units/site.ts';
 import type { Unit } from '../units/unit.ts';
 import type { TypedSheet } from './check-types.ts';
@@ -18,11 +29,16 @@ export interface Parts {
   readonly shownIn: 'us' | 'si' | undefined;
   readonly atmosphere: TypedValue | undefined;
   readonly site: Site;
+  readonly axes: AxisTable;
   readonly inputs: Inputs;
+  readonly columns: readonly EvaluatedColumn[];
+  readonly taken: ReadonlyMap<string, EvaluatedTake>;
+  readonly lookups: readonly EvaluatedLookup[];
   readonly gases: Gases;
   readonly formulas: ReadFormulas;
   readonly typed: TypedSheet;
   readonly computed: Computed;
+  readonly expectations: ReadonlyMap<string, boolean>;
 }
 
 /** Puts the results of all phases together, each value with the unit in which it is shown. */
@@ -32,28 +48,50 @@ export function assembleSheet(parts: Parts): EvaluatedSheet {
     units: parts.units,
     atmosphere: parts.atmosphere ?? null,
     site: parts.site,
+    axes: parts.axes,
     gases: [...parts.gases.gases.values()],
     inputs: parts.inputs.inputs,
+    columns: parts.columns,
+    taken: parts.taken,
+    lookups: parts.lookups,
     steps: assembleSteps(parts),
+    figures: assembleFigures(parts),
     checks: assembleChecks(parts),
+    expectations: parts.expectations,
     functions: LIBRARY,
   };
 }
 
-function assembleSteps({ formulas, typed, computed, units, shownIn }: Parts): Map<string, EvaluatedStep> {
+function assembleSteps(parts: Parts): Map<string, EvaluatedStep> {
+  const { formulas, typed, computed } = parts;
   const steps = new Map<string, EvaluatedStep>();
   for (const [name, { node, formula }] of formulas.steps) {
     const type = typed.steps.get(name)?.type;
-    const si = computed.steps.get(name);
-    if (type === undefined || si === undefined) throw new Error(`no value for the step ${name}`);
-    const wanted: Unit = formula.to?.unit ?? displayUnit(type, units);
-    steps.set(name, {
-      node,
-      formula,
-      value: { type, si, unit: shownIn === undefined ? wanted : inSystem(wanted, shownIn) },
-    });
+    const column = computed.steps.get(name);
+    if (type === undefined || column === undefined) throw new Error(`no value for the step ${name}`);
+    steps.set(name, { node, formula, value: shown(type, column, formula.to?.unit, parts) });
   }
   return steps;
+}
+
+function assembleFigures(parts: Parts): Map<FigureNode, EvaluatedFigure> {
+  const { formulas, typed, computed } = parts;
+  const figures = new Map<FigureNode, EvaluatedFigure>();
+  for (const [node, { of, limit }] of typed.figures) {
+    const columns = computed.figures.get(node);
+    const read = formulas.figures.get(node);
+    if (columns === undefined || read === undefined) throw new Error('no values for a figure');
+    const value = shown(of.type, columns.of, read.of.to?.unit, parts);
+    const limitValue = limit &&
+      columns.limit && { ...shown(limit.type, columns.limit, value.unit, parts), unit: value.unit };
+    figures.set(node, {
+      node,
+      of: read.of.expression,
+      value,
+      limit: limitValue && read.limit ? { expression: read.limit.expression, value: limitValue } : null,
+    });
+  }
+  return figures;
 }
 
 function assembleChecks({ typed, computed }: Parts): Map<CheckNode, EvaluatedCheck> {
@@ -63,4 +101,14 @@ function assembleChecks({ typed, computed }: Parts): Map<CheckNode, EvaluatedChe
     if (judgement !== undefined) checks.set(node, { node, comparison, ...judgement });
   }
   return checks;
+}
+
+function shown(
+  type: QuantityType,
+  column: Value['column'],
+  wanted: Unit | undefined,
+  { units, shownIn }: Parts,
+): Value {
+  const unit = wanted ?? displayUnit(type, units);
+  return { type, column, unit: shownIn === undefined ? unit : inSystem(unit, shownIn) };
 }

@@ -1,26 +1,45 @@
+import type { Axis, AxisName } from '../axes/axis.ts';
+import type { Shape } from '../axes/shape.ts';
 import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import { inferComparison, inferFormula } from '../expression/infer-type.ts';
 import { namesIn } from '../expression/names.ts';
-import type { TypedComparison, TypedFormula, TypeScope } from '../expression/type-scope.ts';
+import { shapeOf, type TypedComparison, type TypedFormula, type TypeScope } from '../expression/type-scope.ts';
 import type { LibraryFunction } from '../library/function.ts';
-import type { CheckNode, SheetDocument } from '../sheet/document.ts';
+import type { CheckNode, FigureNode, SheetDocument } from '../sheet/document.ts';
 import type { QuantityType } from '../units/dimension.ts';
+import type { LookupTable } from '../expression/lookup-table.ts';
+import type { Site } from '../units/site.ts';
+import { figureFaults } from './figure-faults.ts';
 import { orderByDependence } from './order.ts';
 import type { ReadFormulas, ReadStep } from './read-formulas.ts';
 
 /** What is known of a sheet before its formulas are typed. */
 export interface Known {
   readonly document: SheetDocument;
+  /** Types and axes of all that is given. */
   readonly inputs: ReadonlyMap<string, QuantityType>;
+  readonly shapes: ReadonlyMap<string, Shape>;
+  readonly axes: Map<AxisName, Axis>;
   readonly gases: ReadonlySet<string>;
+  readonly tables: ReadonlyMap<string, LookupTable>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
-  readonly hasAtmosphere: boolean;
+  readonly site: Site;
+}
+
+export interface TypedFigure {
+  readonly of: TypedFormula;
+  readonly limit?: TypedFormula;
 }
 
 export interface TypedSheet {
   /** In an order in which each comes after all it reads; a step at fault is left out. */
   readonly steps: ReadonlyMap<string, TypedFormula>;
   readonly checks: ReadonlyMap<CheckNode, TypedComparison>;
+  readonly figures: ReadonlyMap<FigureNode, TypedFigure>;
+  /** Types and axes of all names that have a value, and the names that are at fault. */
+  readonly types: ReadonlyMap<string, QuantityType>;
+  readonly shapes: ReadonlyMap<string, Shape>;
+  readonly faulty: ReadonlySet<string>;
   readonly diagnostics: readonly Diagnostic[];
 }
 
@@ -34,7 +53,8 @@ export function checkTypes(formulas: ReadFormulas, known: Known): TypedSheet {
   const types = new Map(known.inputs);
   const faulty = definedNames(known.document);
   for (const name of types.keys()) faulty.delete(name);
-  const scope: TypeScope = { ...known, types, faulty };
+  const shapes = new Map(known.shapes);
+  const scope: TypeScope = { ...known, types, shapes, faulty };
 
   const steps = new Map<string, TypedFormula>();
   for (const name of order.names) {
@@ -45,10 +65,13 @@ export function checkTypes(formulas: ReadFormulas, known: Known): TypedSheet {
     if (value === undefined) continue;
     steps.set(name, value);
     types.set(name, value.type);
+    const shape = shapeOf(value.typed);
+    if (shape.length > 0) shapes.set(name, shape);
     faulty.delete(name);
   }
   const checks = checkComparisons(formulas, scope, diagnostics);
-  return { steps, checks, diagnostics };
+  const figures = checkFigures(formulas, scope, diagnostics);
+  return { steps, checks, figures, types, shapes, faulty, diagnostics };
 }
 
 function checkComparisons(
@@ -65,14 +88,38 @@ function checkComparisons(
   return checks;
 }
 
+function checkFigures(
+  formulas: ReadFormulas,
+  scope: TypeScope,
+  diagnostics: Diagnostic[],
+): Map<FigureNode, TypedFigure> {
+  const figures = new Map<FigureNode, TypedFigure>();
+  for (const [node, read] of formulas.figures) {
+    const of = inferFormula(read.of, scope);
+    const limit = read.limit && inferFormula(read.limit, scope);
+    diagnostics.push(...of.diagnostics, ...(limit?.diagnostics ?? []));
+    if (of.value === undefined || (limit !== undefined && limit.value === undefined)) continue;
+    const figure = { of: of.value, ...(limit?.value === undefined ? {} : { limit: limit.value }) };
+    const faults = figureFaults(node, figure);
+    diagnostics.push(...faults);
+    if (faults.length === 0) figures.set(node, figure);
+  }
+  return figures;
+}
+
 function readsOf(step: ReadStep): ReadonlySet<string> {
   return namesIn(step.formula.expression);
 }
 
 /** Every name that the sheet defines, well or not. */
-function definedNames({ inputs, sections, unread }: SheetDocument): Set<string> {
+function definedNames({ inputs, take, lookups, conditions, sections, unread }: SheetDocument): Set<string> {
   const steps = sections.flatMap((section) => section.steps);
-  return new Set([...[...inputs, ...steps].map((node) => node.name), ...unread].map((name) => name.text));
+  const columns = conditions?.columns ?? [];
+  return new Set(
+    [...[...inputs, ...take, ...lookups, ...columns, ...steps].map((node) => node.name), ...unread].map(
+      (name) => name.text,
+    ),
+  );
 }
 
 function circleFault(circle: readonly string[], steps: ReadonlyMap<string, ReadStep>): Diagnostic {

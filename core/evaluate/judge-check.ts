@@ -40,8 +40,8 @@ function compare(operator: ComparisonOperator, left: number, right: number): boo
 }
 
 function ratio(demand: number, limit: number): number | null {
-  if (limit > 0 && demand >= 0) return demand / limit;
+  const isMeaningful = (limit > 0 && demand >= 0) || (limit < 0 && demand < 0);
   // Both sides below zero: the larger magnitude is the stronger demand on a lower limit, so the ratio turns over.
-  if (limit < 0 && demand < 0) return limit / demand;
-  return null;
+  const utilisation = limit > 0 ? demand / limit : limit / demand;
+  return isMeaningful && Number.isFinite(utilisation) ? utilisation : null;
 }

@@ -2,7 +2,7 @@ import { error, type Diagnosed, type Diagnostic } from '../diagnostics/diagnosti
 import { parseComparison, parseFormula } from '../expression/parse-formula.ts';
 import type { Comparison, Formula } from '../expression/tree.ts';
 import { unknownUnit } from '../units/unknown-unit.ts';
-import type { CheckNode, SheetDocument, StepNode, Text } from '../sheet/document.ts';
+import type { CheckNode, FigureNode, SheetDocument, StepNode, Text } from '../sheet/document.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 
 /** A step with its formula read. The unit that the engineer wants, by `to` or by `unit:`, stands in the formula. */
@@ -11,10 +11,16 @@ export interface ReadStep {
   readonly formula: Formula;
 }
 
+export interface ReadFigure {
+  readonly of: Formula;
+  readonly limit?: Formula;
+}
+
 export interface ReadFormulas {
   /** By name. A step whose formula cannot be read is left out. */
   readonly steps: ReadonlyMap<string, ReadStep>;
   readonly checks: ReadonlyMap<CheckNode, Comparison>;
+  readonly figures: ReadonlyMap<FigureNode, ReadFigure>;
   readonly diagnostics: readonly Diagnostic[];
 }
 
@@ -22,6 +28,7 @@ export interface ReadFormulas {
 export function readFormulas(document: SheetDocument): ReadFormulas {
   const steps = new Map<string, ReadStep>();
   const checks = new Map<CheckNode, Comparison>();
+  const figures = new Map<FigureNode, ReadFigure>();
   const diagnostics: Diagnostic[] = [];
   for (const section of document.sections) {
     for (const node of section.steps) {
@@ -34,19 +41,29 @@ export function readFormulas(document: SheetDocument): ReadFormulas {
       diagnostics.push(...found);
       if (value !== undefined) checks.set(node, value);
     }
+    for (const node of section.figures) {
+      const of = readShown(node.of, node.unit);
+      const limit = node.limit === undefined ? undefined : readShown(node.limit, node.unit);
+      diagnostics.push(...of.diagnostics, ...(limit?.diagnostics ?? []));
+      if (of.value === undefined || (limit !== undefined && limit.value === undefined)) continue;
+      figures.set(node, { of: of.value, ...(limit?.value === undefined ? {} : { limit: limit.value }) });
+    }
   }
-  return { steps, checks, diagnostics };
+  return { steps, checks, figures, diagnostics };
 }
 
 function readStep(node: StepNode): { step: ReadStep | null; diagnostics: readonly Diagnostic[] } {
-  const { value: formula, diagnostics } = parseFormula(node.calc.text, node.calc.span);
-  const wanted = node.unit === undefined ? undefined : readUnit(node.unit, formula);
+  const { value: formula, diagnostics } = readShown(node.calc, node.unit);
+  return { step: formula === undefined ? null : { node, formula }, diagnostics };
+}
+
+/** A formula, with the unit that stands beside it as if it stood behind `to`. */
+function readShown(text: Text, unit: Text | undefined): Diagnosed<Formula> {
+  const { value: formula, diagnostics } = parseFormula(text.text, text.span);
+  const wanted = unit === undefined ? undefined : readUnit(unit, formula);
   const all = [...diagnostics, ...(wanted?.diagnostics ?? [])];
-  if (formula === undefined) return { step: null, diagnostics: all };
-  return {
-    step: { node, formula: wanted?.value === undefined ? formula : { ...formula, to: wanted.value } },
-    diagnostics: all,
-  };
+  if (formula === undefined) return { diagnostics: all };
+  return { value: wanted?.value === undefined ? formula : { ...formula, to: wanted.value }, diagnostics: all };
 }
 
 function readUnit({ text, span }: Text, formula: Formula | undefined): Diagnosed<NonNullable<Formula['to']>> {

@@ -1,21 +1,21 @@
+import { axisPoints, type NumericAxis } from '../axes/axis.ts';
+import { onlyValue, single } from '../axes/column.ts';
 import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
-import { nearest } from '../diagnostics/nearest.ts';
 import type { EvaluatedInput, TypedNumber, Value } from '../report/evaluated-sheet.ts';
 import type { InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { toSi } from '../units/convert.ts';
 import { inSystem } from '../units/display.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
+import { isRange } from '../units/parse-range.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
 import { NO_SITE, type Site } from '../units/site.ts';
 import { article } from '../units/type-algebra.ts';
-import type { Override } from './request.ts';
+import type { Overrides } from './overrides.ts';
+import type { Axes } from './read-axes.ts';
 
 /** A value as typed: its number keeps its spelling as long as it is shown in the unit it was typed in. */
 export type TypedValue = Value & { readonly typed: TypedNumber | null };
-
-/** Stands as the file's name in the place of a diagnostic about a value set from outside the sheet. */
-export const overrideFile = (name: string): string => `--set ${name}`;
 
 /** The atmosphere turns gauge readings into absolute ones, so it must itself be an absolute pressure. */
 export function readAtmosphere(document: SheetDocument, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
@@ -23,7 +23,7 @@ export function readAtmosphere(document: SheetDocument, units: 'us' | 'si' | und
   if (text === undefined) return { diagnostics: [] };
   const read = readValue(text, NO_SITE, units);
   if (read.value === undefined) return read;
-  const { type, si, unit } = read.value;
+  const { type, column, unit } = read.value;
   if (!sameDimension(type.dimension, PRESSURE) || type.kind !== 'level' || unit.gauge) {
     return {
       diagnostics: [
@@ -33,7 +33,9 @@ export function readAtmosphere(document: SheetDocument, units: 'us' | 'si' | und
       ],
     };
   }
-  return si > 0 ? read : { diagnostics: [error('DOMAIN', text.span, 'the atmosphere must be above zero')] };
+  return onlyValue(column) > 0
+    ? read
+    : { diagnostics: [error('DOMAIN', text.span, 'the atmosphere must be above zero')] };
 }
 
 export interface Inputs {
@@ -44,24 +46,45 @@ export interface Inputs {
 /** Reads every input, or the value that stands in its place from outside. */
 export function readInputs(
   document: SheetDocument,
-  overrides: readonly Override[],
+  overrides: Overrides,
+  { axes, ranges }: Axes,
   site: Site,
   units: 'us' | 'si' | undefined,
 ): Inputs {
-  const set = new Map(overrides.map(({ name, value }) => [name, value]));
-  const diagnostics: Diagnostic[] = [...unknownOverrides(document, overrides)];
+  const diagnostics: Diagnostic[] = [...overrides.diagnostics];
   const inputs = new Map<string, EvaluatedInput>();
   for (const node of document.inputs) {
-    const override = set.get(node.name.text);
-    const written = override === undefined ? node : { ...node, value: overrideText(node.name.text, override) };
-    const read = readValue(written.value, site, units);
-    const misfit = override === undefined ? [] : overrideMisfit(node, written.value, read.value);
+    const { text, isSet } = overrides.of(node);
+    const written = { ...node, value: text };
+    const axis = axes.get(ranges.get(node) ?? 'condition');
+    if (isRange(node.value.text)) {
+      // A range that cannot be read has been reported with the axes.
+      if (ranges.has(node) && axis !== undefined && 'coordinates' in axis)
+        inputs.set(node.name.text, { node: written, value: alongAxis(axis, units), typed: rangeText(axis, units) });
+      continue;
+    }
+    const read = readValue(text, site, units);
+    const misfit = isSet ? overrideMisfit(node, text, read.value) : [];
     diagnostics.push(...read.diagnostics, ...misfit);
     // A misfit is left out, or every formula that uses it would be reported as well.
     if (read.value !== undefined && misfit.length === 0)
       inputs.set(node.name.text, evaluatedInput(written, read.value));
   }
   return { inputs, diagnostics };
+}
+
+/** The values of an axis, as those of the input that lays it down. */
+function alongAxis({ name, coordinates, type, unit }: NumericAxis, units: 'us' | 'si' | undefined): Value {
+  const column = { axes: [name], data: coordinates };
+  return { type, column, unit: units === undefined ? unit : inSystem(unit, units) };
+}
+
+/** Both ends as they were typed, as long as they are shown in the unit of the range. */
+function rangeText(axis: NumericAxis, units: 'us' | 'si' | undefined): TypedNumber | null {
+  if (units !== undefined && inSystem(axis.unit, units).text !== axis.unit.text) return null;
+  const points = axisPoints(axis);
+  const [first, last] = [points[0], points.at(-1)];
+  return { number: Number(first), text: first === last ? String(first) : `${first} … ${last}` };
 }
 
 /** The formulas were written for the value in the sheet, so what stands in its place must be of the same kind. */
@@ -74,7 +97,7 @@ function overrideMisfit(node: InputNode, override: Text, set: TypedValue | undef
 }
 
 /** K and degR may stand for a level as well as for a difference. */
-function isSameKind(a: QuantityType, b: QuantityType): boolean {
+export function isSameKind(a: QuantityType, b: QuantityType): boolean {
   return sameDimension(a.dimension, b.dimension) && (a.kind === b.kind || a.kind === 'open' || b.kind === 'open');
 }
 
@@ -82,7 +105,8 @@ function evaluatedInput(node: InputNode, { typed, ...value }: TypedValue): Evalu
   return { node, value, typed };
 }
 
-function readValue(text: Text, site: Site, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
+/** Reads one value with its unit. */
+export function readValue(text: Text, site: Site, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
   const { value: read, diagnostics } = parseQuantity(text.text, text.span);
   if (read === undefined) return { diagnostics };
   if (read.unit.gauge && site.atmosphere === undefined) {
@@ -92,26 +116,11 @@ function readValue(text: Text, site: Site, units: 'us' | 'si' | undefined): Diag
   const type = { dimension: read.unit.dimension, kind: read.unit.kind };
   const unit = units === undefined ? read.unit : inSystem(read.unit, units);
   const typed = unit.text === read.unit.text ? { number: read.number, text: read.numberText } : null;
-  return { value: { type, si, unit, typed }, diagnostics };
+  return { value: { type, column: single(si), unit, typed }, diagnostics };
 }
 
 function missingAtmosphere(span: Span, unit: string): Diagnostic {
   return error('ATMOSPHERE_MISSING', span, `\`${unit}\` is a gauge pressure, and the sheet states no atmosphere`, {
     hints: ['add `atmosphere: 14.696 psia` (the pressure at your site) at the top of the sheet'],
   });
-}
-
-function overrideText(name: string, value: string): Text {
-  return { text: value, span: { file: overrideFile(name), start: 0, end: value.length } };
-}
-
-function unknownOverrides(document: SheetDocument, overrides: readonly Override[]): Diagnostic[] {
-  const names = document.inputs.map((input) => input.name.text);
-  return overrides
-    .filter(({ name }) => !names.includes(name))
-    .map(({ name, value }) => {
-      const near = nearest(name, names);
-      const hint = near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : 'only inputs of the sheet can be set';
-      return error('OVERRIDE', overrideText(name, value).span, `the sheet has no input \`${name}\``, { hints: [hint] });
-    });
 }

@@ -16,6 +16,8 @@ export interface EvaluateRequest {
   readonly entry: string;
   readonly files: readonly SourceFile[];
   readonly overrides?: readonly Override[];
+  /** Evaluates this operating condition alone. */
+  readonly condition?: string;
   /** Shows all results in this system, whatever the sheet says. */
   readonly units?: 'us' | 'si';
 }

@@ -10,7 +10,7 @@ import {
 } from './mathjs-parser.ts';
 import { spanIn, type SourceText } from './source-text.ts';
 import type { Token } from './token.ts';
-import type { ArithmeticOperator, Expression } from './tree.ts';
+import type { ArithmeticOperator, ComparisonOperator, Expression } from './tree.ts';
 
 /** Makes the checked tree of a formula from its tokens. */
 export function buildTree(source: SourceText, tokens: readonly Token[]): Diagnosed<Expression> {
@@ -113,12 +113,20 @@ class Builder {
 
   private operation({ operator, operands, implicit }: OperatorNode): Built {
     const [left, right] = operands;
-    if (left === undefined || implicit || !isArithmetic(operator))
-      throw new Error(`the parser gave the operator ${operator}`);
+    if (left === undefined || implicit) throw new Error(`the parser gave the operator ${operator}`);
+    if (right !== undefined && isComparison(operator))
+      return this.comparison(operator, this.build(left), this.build(right));
+    if (!isArithmetic(operator)) throw new Error(`the parser gave the operator ${operator}`);
     if (right === undefined) return this.signed(operator, this.build(left));
     const [a, b] = [this.build(left), this.build(right)];
     const span = this.span(a.first, b.last);
     const expression: Expression = { node: 'binary', span, operator, left: a.expression, right: b.expression };
+    return { expression, first: a.first, last: b.last };
+  }
+
+  private comparison(operator: ComparisonOperator, a: Built, b: Built): Built {
+    const span = this.span(a.first, b.last);
+    const expression: Expression = { node: 'comparison', span, operator, left: a.expression, right: b.expression };
     return { expression, first: a.first, last: b.last };
   }
 
@@ -182,6 +190,10 @@ function leafOf(token: Token, span: Expression['span']): Expression {
 
 function indexOf(placeholderName: string): number {
   return Number(placeholderName.slice(1));
+}
+
+function isComparison(operator: string): operator is ComparisonOperator {
+  return operator === '<' || operator === '<=' || operator === '>' || operator === '>=';
 }
 
 function isArithmetic(operator: string): operator is ArithmeticOperator {

@@ -137,17 +137,40 @@ function tooDeep(source: SourceText, token: Token): Diagnostic {
   });
 }
 
+/** Comparisons stand in checks, and one stands in the first argument of `where`. */
 function checkComparisons(source: SourceText, tokens: readonly Token[]): Diagnostic[] {
+  const allowed = comparisonsOfWhere(tokens);
   return tokens
-    .filter(({ kind }) => kind === 'comparison')
+    .filter((token) => token.kind === 'comparison' && !allowed.has(token))
     .map((token) =>
       error(
         'EXPRESSION_NOT_ALLOWED',
         spanIn(source, token.start, token.end),
         `\`${token.text}\` stands where a formula is wanted`,
         {
-          hints: ['comparisons stand under `checks`, one in each, and outside brackets'],
+          hints: [
+            'comparisons stand under `checks`, one in each and outside brackets, and in the first argument of `where(…)`',
+          ],
         },
       ),
     );
+}
+
+/** The first comparison directly in the first argument of each call of `where`. */
+function comparisonsOfWhere(tokens: readonly Token[]): ReadonlySet<Token> {
+  const allowed = new Set<Token>();
+  const open: { waits: boolean }[] = [];
+  for (const [i, token] of tokens.entries()) {
+    const inside = open.at(-1);
+    if (token.kind === 'open') {
+      const before = tokens[i - 1];
+      open.push({ waits: before?.kind === 'function' && before.text === 'where' });
+    } else if (token.kind === 'close') {
+      open.pop();
+    } else if (inside !== undefined && inside.waits && (token.kind === 'comma' || token.kind === 'comparison')) {
+      inside.waits = false;
+      if (token.kind === 'comparison') allowed.add(token);
+    }
+  }
+  return allowed;
 }

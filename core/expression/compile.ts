@@ -1,183 +1,79 @@
-import type { GasModel } from '../gas/gas-model.ts';
-import type { LibraryFunction, Parameter } from '../library/function.ts';
-import { toSi } from '../units/convert.ts';
+import type { Shape } from '../axes/shape.ts';
+import type { LibraryFunction } from '../library/function.ts';
 import type { Site } from '../units/site.ts';
-import { CONSTANTS } from './constants.ts';
-import { MATHEMATICS } from './mathematics.ts';
-import { visit } from './names.ts';
-import type { Instruction, LibraryArgument, Program } from './program.ts';
-import type { Expression } from './tree.ts';
-import type { TypedExpression } from './type-scope.ts';
+import type { GasColumn } from './gas-column.ts';
+import { KernelBuilder } from './kernel-builder.ts';
+import type { Program, Source, Stage } from './program.ts';
+import type { Call, Expression } from './tree.ts';
+import type { AxisCall, TypedExpression } from './type-scope.ts';
 
 /** Where a program finds what its names stand for. */
 export interface CompileContext {
-  /** Place of each quantity among the values that the program is run with. */
+  /** Place of each quantity among the columns that the program is run with. */
   readonly slots: ReadonlyMap<string, number>;
-  readonly gases: ReadonlyMap<string, GasModel>;
+  readonly gases: ReadonlyMap<string, GasColumn>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
   readonly site: Site;
 }
 
-/** Turns a checked expression into a flat program. What the check has let through cannot fail here. */
-export function compile({ expression, factors }: TypedExpression, context: CompileContext): Program {
-  return new Compiler(factors, context).compile(expression);
+/** Turns a checked expression into a program. What the check has let through cannot fail here. */
+export function compile(typed: TypedExpression, context: CompileContext): Program {
+  const compiler = new Compiler(typed, context);
+  const result = compiler.source(typed.expression);
+  return { stages: compiler.stages, temps: compiler.stages.length, result };
 }
 
-type Register = { readonly bank: 'input' | 'constant' | 'work'; readonly index: number };
+/** An equation of state costs some hundred sums. */
+const LIBRARY_COST = 50;
 
-/** An instruction whose registers are not numbered yet: the banks' sizes are known only at the end. */
-type Emit = (number: (register: Register) => number) => Instruction;
+/** Work of a program, in operations on single values. */
+export function workOf({ stages }: Program, cells: (axes: Shape) => number): number {
+  return stages.reduce((sum, stage) => {
+    if (stage.stage !== 'kernel') return sum;
+    const { axes, instructions } = stage.kernel;
+    const each = instructions.reduce((cost, { op }) => cost + (op === 'library' ? LIBRARY_COST : 1), 1);
+    return sum + each * cells(axes);
+  }, 0);
+}
 
-class Compiler {
-  private readonly factors: TypedExpression['factors'];
-  private readonly context: CompileContext;
-  private readonly inputs: { name: string; slot: number }[] = [];
-  private readonly constants: number[] = [];
-  private readonly emitted: Emit[] = [];
-  private readonly free: number[] = [];
-  private workRegisters = 0;
+/** Lays out the stages of one program. */
+export class Compiler {
+  readonly stages: Stage[] = [];
+  readonly typed: TypedExpression;
+  readonly context: CompileContext;
 
-  constructor(factors: TypedExpression['factors'], context: CompileContext) {
-    this.factors = factors;
+  constructor(typed: TypedExpression, context: CompileContext) {
+    this.typed = typed;
     this.context = context;
   }
 
-  compile(expression: Expression): Program {
-    const result = this.value(expression);
-    const starts = { input: 0, constant: this.inputs.length, work: this.inputs.length + this.constants.length };
-    const number = ({ bank, index }: Register): number => starts[bank] + index;
-    return {
-      inputs: this.inputs,
-      constants: this.constants,
-      instructions: this.emitted.map((emit) => emit(number)),
-      registers: starts.work + this.workRegisters,
-      result: number(result),
-    };
+  axesOf(expression: Expression): Shape {
+    return this.typed.shapes.get(expression) ?? [];
   }
 
-  private value(expression: Expression): Register {
-    switch (expression.node) {
-      case 'number':
-        return this.constant(expression.value);
-      case 'quantity':
-        return this.constant(toSi(expression.number, expression.unit, this.context.site));
-      case 'name':
-        return this.name(expression.name);
-      case 'negate':
-        return this.negate(expression);
-      case 'binary':
-        return this.binary(expression);
-      case 'call':
-        return this.call(expression);
-      case 'text':
-        throw new Error('a text stands for a value');
-    }
+  /** A column that holds all values of an expression; what it takes to make it becomes stages. */
+  source(expression: Expression): Source {
+    const slot = expression.node === 'name' ? this.context.slots.get(expression.name) : undefined;
+    if (expression.node === 'name' && slot !== undefined) return { slot, name: expression.name };
+    const call = this.typed.calls.get(expression);
+    if (call !== undefined && call.call !== 'interpolate' && expression.node === 'call')
+      return this.alongAxes(expression, call);
+    const kernel = new KernelBuilder(this, this.axesOf(expression)).build(expression);
+    return this.push({ stage: 'kernel', kernel, to: this.stages.length });
   }
 
-  private constant(value: number): Register {
-    const known = this.constants.findIndex((constant) => Object.is(constant, value));
-    return { bank: 'constant', index: known === -1 ? this.constants.push(value) - 1 : known };
+  private alongAxes({ arguments: [first] }: Call, call: Exclude<AxisCall, { call: 'interpolate' }>): Source {
+    if (call.call === 'count') return this.push({ stage: 'count', axis: call.axis, to: this.stages.length });
+    if (first === undefined) throw new Error('a call along an axis has no argument');
+    const from = this.source(first);
+    const to = this.stages.length;
+    return call.call === 'reduce'
+      ? this.push({ stage: 'reduce', how: call.how, over: call.over, from, to })
+      : this.push({ stage: 'pick', axis: call.axis, index: call.index, from, to });
   }
 
-  private name(name: string): Register {
-    const slot = this.context.slots.get(name);
-    if (slot === undefined) {
-      const constant = CONSTANTS.get(name);
-      if (constant === undefined) throw new Error(`no value for ${name}`);
-      return this.constant(constant.value);
-    }
-    const known = this.inputs.findIndex((input) => input.slot === slot);
-    return { bank: 'input', index: known === -1 ? this.inputs.push({ name, slot }) - 1 : known };
-  }
-
-  private negate({ operand }: Expression & { node: 'negate' }): Register {
-    const from = this.value(operand);
-    const to = this.target([from]);
-    this.emitted.push((number) => ({ op: 'negate', to: number(to), from: number(from) }));
-    return to;
-  }
-
-  private binary({ operator, left, right, span }: Expression & { node: 'binary' }): Register {
-    const [a, b] = [this.value(left), this.value(right)];
-    const to = this.target([a, b]);
-    const rightInputs = this.inputsOf(right);
-    this.emitted.push((number) => ({
-      op: operator,
-      to: number(to),
-      left: number(a),
-      right: number(b),
-      span,
-      leftSpan: left.span,
-      rightSpan: right.span,
-      rightInputs,
-    }));
-    return to;
-  }
-
-  private call(call: Expression & { node: 'call' }): Register {
-    const { span } = call;
-    const argumentSpans = call.arguments.map((argument) => argument.span);
-    const mathFunction = MATHEMATICS.get(call.function);
-    if (mathFunction !== undefined) {
-      const args = call.arguments.map((argument) => this.value(argument));
-      const to = this.target(args);
-      this.emitted.push((number) => ({
-        op: 'mathematics',
-        to: number(to),
-        function: mathFunction,
-        arguments: args.map(number),
-        span,
-        argumentSpans,
-      }));
-      return to;
-    }
-    const fn = this.context.functions.get(call.function);
-    if (fn === undefined) throw new Error(`no function ${call.function}`);
-    const args = call.arguments.map((argument, i) => this.argument(argument, fn.parameters[i]));
-    const to = this.target(args.flatMap((argument) => ('fixed' in argument ? [] : [argument])));
-    this.emitted.push((number) => ({
-      op: 'library',
-      to: number(to),
-      function: fn,
-      arguments: args.map((argument): LibraryArgument =>
-        'fixed' in argument ? argument : { register: number(argument) },
-      ),
-      span,
-      argumentSpans,
-    }));
-    return to;
-  }
-
-  private argument(
-    argument: Expression,
-    parameter: Parameter | undefined,
-  ): Register | { readonly fixed: string | GasModel } {
-    if (argument.node === 'text') return { fixed: argument.value };
-    if (parameter?.kind.takes === 'gas' && argument.node === 'name') {
-      const gas = this.context.gases.get(argument.name);
-      if (gas === undefined) throw new Error(`no gas ${argument.name}`);
-      return { fixed: gas };
-    }
-    const given = this.value(argument);
-    const factor = this.factors.get(argument);
-    if (factor === undefined) return given;
-    const to = this.target([given]);
-    this.emitted.push((number) => ({ op: 'scale', to: number(to), from: number(given), factor }));
-    return to;
-  }
-
-  /** A register for a result; those of its operands are free from here on. */
-  private target(operands: readonly Register[]): Register {
-    for (const { bank, index } of operands) if (bank === 'work') this.free.push(index);
-    return { bank: 'work', index: this.free.pop() ?? this.workRegisters++ };
-  }
-
-  /** Registers of the inputs that an expression reads; all of them have been numbered when it was compiled. */
-  private inputsOf(expression: Expression): number[] {
-    const slots = new Set<number | undefined>();
-    visit(expression, (node) => {
-      if (node.node === 'name') slots.add(this.context.slots.get(node.name));
-    });
-    return this.inputs.flatMap(({ slot }, i) => (slots.has(slot) ? [i] : []));
+  private push(stage: Stage): Source {
+    this.stages.push(stage);
+    return { temp: stage.to };
   }
 }

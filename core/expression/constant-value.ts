@@ -18,6 +18,7 @@ export function constantValue(expression: Expression): number | undefined {
     case 'quantity':
     case 'text':
     case 'call':
+    case 'comparison':
       return undefined;
   }
 }

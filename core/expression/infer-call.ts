@@ -1,17 +1,27 @@
+import { unionShapes } from '../axes/shape.ts';
 import type { LibraryFunction, Parameter } from '../library/function.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { NUMBER } from '../units/dimensions.ts';
 import { acceptType } from '../units/type-conversion.ts';
 import type { TypeFault } from '../units/type-algebra.ts';
+import { AXIS_FUNCTIONS } from './axis-functions.ts';
+import { inferAxisCall } from './infer-axis-call.ts';
+import { checkCount, type TypedCall } from './typed-call.ts';
 import type { Inference, Inferred } from './infer-type.ts';
 import { MATHEMATICS, type MathFunction } from './mathematics.ts';
-import type { Expression } from './tree.ts';
+import type { Call, Expression } from './tree.ts';
 import { unknownFunction, unknownGas } from './unknown-name.ts';
 
-type Call = Expression & { readonly node: 'call' };
-
 /** Type of a call; undefined where a fault has been reported. Arguments are checked even where the function is unknown. */
-export function inferCall(call: Call, inference: Inference): QuantityType | undefined {
+export function inferCall(call: Call, inference: Inference): TypedCall | undefined {
+  const axisFunction = AXIS_FUNCTIONS.get(call.function);
+  if (axisFunction !== undefined) return inferAxisCall(call, axisFunction, inference);
+  const type = inferSingleCall(call, inference);
+  return type && { type, axes: unionShapes(call.arguments.map((argument) => inference.shapes.get(argument) ?? [])) };
+}
+
+/** A function that takes single values; over axes it is called for each. */
+function inferSingleCall(call: Call, inference: Inference): QuantityType | undefined {
   const mathFunction = MATHEMATICS.get(call.function);
   if (mathFunction !== undefined) return inferMath(call, mathFunction, inference);
   const libraryFunction = inference.scope.functions.get(call.function);
@@ -57,23 +67,6 @@ function inferLibrary(call: Call, fn: LibraryFunction, inference: Inference): Qu
   return { dimension, kind };
 }
 
-function checkCount(call: Call, least: number, most: number, names: string, inference: Inference): boolean {
-  const given = call.arguments.length;
-  if (given >= least && given <= most) return true;
-  const wanted =
-    least === most ? String(least) : most === Number.POSITIVE_INFINITY ? `${least} or more` : `${least} to ${most}`;
-  const surplus = given > most ? call.arguments[most] : undefined;
-  const span = surplus === undefined ? call.span : { ...call.span, start: surplus.span.start, end: call.span.end - 1 };
-  const noun = wanted === '1' ? 'argument' : 'arguments';
-  inference.report(
-    'FUNCTION_ARGUMENTS',
-    span,
-    `\`${call.function}\` takes ${wanted} ${noun}, and ${given === 0 ? 'none' : given} ${given > 1 ? 'are' : 'is'} given`,
-    [`it is written \`${call.function}(${names})\``],
-  );
-  return false;
-}
-
 function inferArgument(argument: Expression, parameter: Parameter, fn: LibraryFunction, inference: Inference): boolean {
   switch (parameter.kind.takes) {
     case 'gas':
@@ -92,7 +85,11 @@ function inferArgument(argument: Expression, parameter: Parameter, fn: LibraryFu
 }
 
 function gasArgument(argument: Expression, parameter: Parameter, fn: LibraryFunction, inference: Inference): boolean {
-  if (argument.node === 'name' && inference.scope.gases.has(argument.name)) return true;
+  if (argument.node === 'name' && inference.scope.gases.has(argument.name)) {
+    const axes = inference.scope.shapes.get(argument.name);
+    if (axes !== undefined) inference.shapes.set(argument, axes);
+    return true;
+  }
   if (argument.node === 'name' && !inference.scope.types.has(argument.name)) {
     inference.diagnostics.push(unknownGas(argument.name, argument.span, inference.scope));
     return false;

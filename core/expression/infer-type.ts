@@ -1,3 +1,4 @@
+import { SCALAR, unionShape, type Shape } from '../axes/shape.ts';
 import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { describeType, isNumber, NUMBER } from '../units/dimensions.ts';
@@ -20,15 +21,15 @@ import { constantValue } from './constant-value.ts';
 import { CONSTANTS } from './constants.ts';
 import { inferCall } from './infer-call.ts';
 import type { Comparison, Expression, Formula } from './tree.ts';
-import type { TypedComparison, TypedExpression, TypedFormula, TypeScope } from './type-scope.ts';
-import { gasAsValue, unitOrName, unknownName } from './unknown-name.ts';
+import type { AxisCall, TypedComparison, TypedExpression, TypedFormula, TypeScope } from './type-scope.ts';
+import { misplacedName, unitOrName } from './unknown-name.ts';
 
 /** Checks the dimensions of an expression against the names it may use. All its faults are reported. */
 export function inferType(expression: Expression, scope: TypeScope): Diagnosed<TypedExpression> {
   const inference = new Inference(scope);
   const type = inference.infer(expression)?.type;
-  const { diagnostics, factors } = inference;
-  return type === undefined ? { diagnostics } : { value: { expression, type, factors }, diagnostics };
+  const { diagnostics } = inference;
+  return type === undefined ? { diagnostics } : { value: inference.typed(expression, type), diagnostics };
 }
 
 /** As {@link inferType}, and checks that the result can be shown in the unit behind `to`. */
@@ -54,16 +55,17 @@ export function inferComparison(comparison: Comparison, scope: TypeScope): Diagn
   if ('fault' in common) return { diagnostics: [...diagnostics, faultAt(common.fault, comparison.span)] };
   const value: TypedComparison = {
     comparison,
-    left: { expression: comparison.left, type: left.type, factors: leftSide.factors },
-    right: { expression: comparison.right, type: right.type, factors: rightSide.factors },
+    left: leftSide.typed(comparison.left, left.type),
+    right: rightSide.typed(comparison.right, right.type),
     type: common.type,
   };
   return { value, diagnostics };
 }
 
-/** An operand as the algebra of types sees it, with the power of pi among its dimensionless factors. */
+/** An operand as the algebra of types sees it, with the power of pi among its dimensionless factors, and its axes. */
 export interface Inferred extends Operand {
   readonly piPower: number;
+  readonly axes: Shape;
 }
 
 /** The inference of one expression: its faults, and the factors that its arguments take on the way. */
@@ -71,6 +73,8 @@ export class Inference {
   readonly scope: TypeScope;
   readonly diagnostics: Diagnostic[] = [];
   readonly factors = new Map<Expression, number>();
+  readonly shapes = new Map<Expression, Shape>();
+  readonly calls = new Map<Expression, AxisCall>();
 
   constructor(scope: TypeScope) {
     this.scope = scope;
@@ -78,6 +82,18 @@ export class Inference {
 
   /** Undefined where a fault has been reported, here or in a formula that this one rests on. */
   infer(expression: Expression): Inferred | undefined {
+    const found = this.inferNode(expression);
+    if (found !== undefined && found.axes.length > 0) this.shapes.set(expression, found.axes);
+    return found;
+  }
+
+  /** An expression without faults, with all that has been found out about its parts. */
+  typed(expression: Expression, type: QuantityType): TypedExpression {
+    const { shapes, factors, calls } = this;
+    return { expression, type, shapes, factors, calls };
+  }
+
+  private inferNode(expression: Expression): Inferred | undefined {
     switch (expression.node) {
       case 'number':
         return inferred({ dimension: NUMBER, kind: 'plain' }, { literal: true });
@@ -94,9 +110,11 @@ export class Inference {
         return this.negate(expression);
       case 'binary':
         return this.binary(expression);
+      case 'comparison':
+        throw new Error('a comparison stands for a value');
       case 'call': {
-        const type = inferCall(expression, this);
-        return type === undefined ? undefined : inferred(type);
+        const found = inferCall(expression, this);
+        return found === undefined ? undefined : inferred(found.type, { axes: found.axes });
       }
     }
   }
@@ -120,11 +138,11 @@ export class Inference {
 
   private name({ name, span }: Expression & { node: 'name' }): Inferred | undefined {
     const type = this.scope.types.get(name);
-    if (type !== undefined) return inferred(type);
+    if (type !== undefined) return inferred(type, { axes: this.scope.shapes.get(name) ?? [] });
     if (CONSTANTS.has(name))
       return inferred({ dimension: NUMBER, kind: 'plain' }, { literal: true, piPower: name === 'pi' ? 1 : 0 });
     if (this.scope.faulty?.has(name) === true) return undefined;
-    this.diagnostics.push(this.scope.gases.has(name) ? gasAsValue(name, span) : unknownName(name, span, this.scope));
+    this.diagnostics.push(misplacedName(name, span, this.scope));
     return undefined;
   }
 
@@ -138,16 +156,17 @@ export class Inference {
     const [left, right] = [this.infer(expression.left), this.infer(expression.right)];
     if (left === undefined || right === undefined) return undefined;
     const literal = left.literal === true && right.literal === true;
+    const axes = unionShape(left.axes, right.axes);
     const { span } = expression;
     switch (expression.operator) {
       case '+':
-        return this.settle(addTypes(left, right), span, { literal, piPower: sumPower(left, right) });
+        return this.settle(addTypes(left, right), span, { literal, axes, piPower: sumPower(left, right) });
       case '-':
-        return this.settle(subtractTypes(left, right), span, { literal, piPower: sumPower(left, right) });
+        return this.settle(subtractTypes(left, right), span, { literal, axes, piPower: sumPower(left, right) });
       case '*':
-        return this.settle(product(left, right), span, { literal, piPower: productPower(left, right, 1) });
+        return this.settle(product(left, right), span, { literal, axes, piPower: productPower(left, right, 1) });
       case '/':
-        return this.settle(quotient(left, right), span, { literal, piPower: productPower(left, right, -1) });
+        return this.settle(quotient(left, right), span, { literal, axes, piPower: productPower(left, right, -1) });
     }
   }
 
@@ -165,9 +184,14 @@ export class Inference {
     const constant = constantValue(right);
     if (constant !== undefined && Number.isFinite(constant)) {
       const literal = base.literal === true;
-      return this.settle(powerType(base, constant), span, { literal, piPower: base.piPower * constant });
+      return this.settle(powerType(base, constant), span, {
+        literal,
+        axes: base.axes,
+        piPower: base.piPower * constant,
+      });
     }
-    if (isNumber(base.type.dimension)) return inferred({ dimension: NUMBER, kind: 'plain' });
+    const axes = unionShape(base.axes, exponent.axes);
+    if (isNumber(base.type.dimension)) return inferred({ dimension: NUMBER, kind: 'plain' }, { axes });
     this.report('UNIT_MISMATCH', left.span, `${article(describeType(base.type))} has an exponent that is computed`, [
       'divide the base by a reference of the same dimension first, or write the exponent as a number',
     ]);
@@ -182,13 +206,14 @@ export class Inference {
 }
 
 interface Marks {
+  readonly axes?: Shape;
   readonly literal?: boolean;
   readonly piPower?: number;
 }
 
-function inferred(type: QuantityType, { literal = false, piPower = 0 }: Marks = {}): Inferred {
+function inferred(type: QuantityType, { axes = SCALAR, literal = false, piPower = 0 }: Marks = {}): Inferred {
   const power = isNumber(type.dimension) ? piPower : 0;
-  return { type, literal, piPower: power, carriesPi: power === 1 };
+  return { type, axes, literal, piPower: power, carriesPi: power === 1 };
 }
 
 /** A number made with 1/pi divides by pi: (1/(2*pi))*w is w/(2*pi). */
@@ -216,7 +241,7 @@ function missingAtmosphere(
   { unit, span }: { readonly unit: Unit; readonly span: Span },
   scope: TypeScope,
 ): Diagnostic[] {
-  if (!unit.gauge || scope.hasAtmosphere) return [];
+  if (!unit.gauge || scope.site.atmosphere !== undefined) return [];
   return [
     error('ATMOSPHERE_MISSING', span, `\`${unit.text}\` is a gauge pressure, and the sheet states no atmosphere`, {
       hints: ['add `atmosphere: 14.696 psia` (the pressure at your site) at the top of the sheet'],

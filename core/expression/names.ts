@@ -1,5 +1,5 @@
 import { CONSTANTS } from './constants.ts';
-import { MATHEMATICS } from './mathematics.ts';
+import { isBuiltIn } from './built-in.ts';
 import type { Expression } from './tree.ts';
 
 /** Names of quantities and gases that an expression reads, in order of appearance; constants are not among them. */
@@ -22,7 +22,7 @@ export function functionsIn(expression: Expression): Set<string> {
 
 /** True for names that no quantity of a sheet may have: constants, built-in functions and `to`. */
 export function isReservedName(name: string): boolean {
-  return name === 'to' || CONSTANTS.has(name) || MATHEMATICS.has(name);
+  return name === 'to' || CONSTANTS.has(name) || isBuiltIn(name);
 }
 
 /** Calls `see` for a node and all below it, from left to right. */
@@ -33,6 +33,7 @@ export function visit(expression: Expression, see: (node: Expression) => void): 
       visit(expression.operand, see);
       return;
     case 'binary':
+    case 'comparison':
       visit(expression.left, see);
       visit(expression.right, see);
       return;

@@ -6,16 +6,31 @@ import { NO_SITE } from '../units/site.ts';
 import { printNumber } from '../units/print.ts';
 import { noticeDiagnostics, notFinite } from './notices.ts';
 import type { LibraryInstruction } from './program.ts';
+import type { Cell } from './run-cell.ts';
+
+/** Whether all numbers among the arguments lie in the ranges that their parameters declare. */
+export function inRange({ function: { parameters } }: LibraryInstruction, args: readonly Argument[]): boolean {
+  for (let i = 0; i < args.length; i += 1) {
+    const [value, parameter] = [args[i], parameters[i]];
+    if (parameter === undefined || typeof value !== 'number') continue;
+    if (parameter.kind.takes === 'number' && parameter.kind.integer === true && !Number.isInteger(value)) return false;
+    const { above, from, below, to } = parameter.range ?? {};
+    const fits =
+      !(above !== undefined && value <= above) &&
+      !(from !== undefined && value < from) &&
+      !(below !== undefined && value >= below) &&
+      !(to !== undefined && value > to);
+    if (!fits) return false;
+  }
+  return true;
+}
 
 /** Calls a function of the library, once its arguments lie in the ranges that it declares. */
-export function callLibrary(
-  instruction: LibraryInstruction,
-  registers: Float64Array,
-  diagnostics: Diagnostic[],
-): number {
-  const args: Argument[] = instruction.arguments.map((argument) =>
-    'fixed' in argument ? argument.fixed : (registers[argument.register] ?? Number.NaN),
-  );
+export function callLibrary(instruction: LibraryInstruction, { registers, gasOf, diagnostics }: Cell): number {
+  const args: Argument[] = instruction.arguments.map((argument) => {
+    if ('register' in argument) return registers[argument.register] ?? Number.NaN;
+    return 'fixed' in argument ? argument.fixed : gasOf(argument);
+  });
   if (args.some(Number.isNaN)) return Number.NaN;
   const outside = rangeFaults(instruction, args);
   diagnostics.push(...outside);

@@ -2,6 +2,7 @@ import type { LibraryFunction } from '../library/function.ts';
 import { printTyped } from '../units/print.ts';
 import type { Printed } from '../units/printed.ts';
 import { namedUnit } from '../units/table.ts';
+import { AXIS_FUNCTIONS } from './axis-functions.ts';
 import { CONSTANTS } from './constants.ts';
 import { MATHEMATICS } from './mathematics.ts';
 import { fraction, negative, piece, power, printedPiece, product, quotient, sum, type Piece } from './tex-piece.ts';
@@ -26,7 +27,12 @@ export function expressionTex(expression: Expression, options: TexOptions): stri
 
 /** Both sides of a comparison in TeX, with its sign between them. */
 export function comparisonTex({ left, operator, right }: Comparison, options: TexOptions): string {
-  return `${expressionTex(left, options)} ${COMPARISONS[operator]} ${expressionTex(right, options)}`;
+  const typesetter = new Typesetter(options);
+  return comparisonTexOf(operator, typesetter.set(left, 'display'), typesetter.set(right, 'display'));
+}
+
+function comparisonTexOf(operator: ComparisonOperator, left: Piece, right: Piece): string {
+  return `${left.tex} ${COMPARISONS[operator]} ${right.tex}`;
 }
 
 const COMPARISONS: Readonly<Record<ComparisonOperator, string>> = { '<': '<', '<=': '\\le', '>': '>', '>=': '\\ge' };
@@ -55,6 +61,11 @@ class Typesetter {
         return negative(this.set(expression.operand, place));
       case 'binary':
         return this.binary(expression, place);
+      case 'comparison':
+        return piece(
+          comparisonTexOf(expression.operator, this.set(expression.left, 'line'), this.set(expression.right, 'line')),
+          'sum',
+        );
       case 'call':
         return this.call(expression, place);
     }
@@ -85,8 +96,8 @@ class Typesetter {
 
   private call(call: Expression & { node: 'call' }, place: Place): Piece {
     const args = call.arguments.map((argument) => this.set(argument, place).tex);
-    const mathFunction = MATHEMATICS.get(call.function);
-    if (mathFunction !== undefined) return piece(mathFunction.tex(args), 'whole');
+    const builtIn = MATHEMATICS.get(call.function) ?? AXIS_FUNCTIONS.get(call.function);
+    if (builtIn !== undefined) return piece(builtIn.tex(args), 'whole');
     const head = functionHead(this.options.functions.get(call.function)?.symbol ?? call.function);
     return piece(`${head}${bracketed(args)}`, 'whole');
   }

@@ -26,6 +26,14 @@ export type Expression =
       readonly left: Expression;
       readonly right: Expression;
     }
+  /** Only as the first argument of `where`. */
+  | {
+      readonly node: 'comparison';
+      readonly span: Span;
+      readonly operator: ComparisonOperator;
+      readonly left: Expression;
+      readonly right: Expression;
+    }
   | {
       readonly node: 'call';
       readonly span: Span;
@@ -33,6 +41,8 @@ export type Expression =
       readonly function: string;
       readonly arguments: readonly Expression[];
     };
+
+export type Call = Expression & { readonly node: 'call' };
 
 /** A formula: an expression, and after `to` the unit in which its result is shown. */
 export interface Formula {

@@ -2,13 +2,19 @@ import { error, warning, type Diagnostic, type Span } from '../diagnostics/diagn
 import { nearest } from '../diagnostics/nearest.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 import { CONSTANTS } from './constants.ts';
-import { MATHEMATICS } from './mathematics.ts';
+import { BUILT_IN_NAMES, isBuiltIn } from './built-in.ts';
 import type { Expression } from './tree.ts';
 import type { TypeScope } from './type-scope.ts';
 
+/** A name that stands where a value is wanted, and is none. */
+export function misplacedName(name: string, span: Span, scope: TypeScope): Diagnostic {
+  if (scope.gases.has(name)) return gasAsValue(name, span);
+  return scope.tables.has(name) ? tableAsValue(name, span) : unknownName(name, span, scope);
+}
+
 /** A name that nothing defines, with the slip it probably is: a misspelling, a unit without a number, a call without brackets. */
-export function unknownName(name: string, span: Span, scope: TypeScope): Diagnostic {
-  if (MATHEMATICS.has(name) || scope.functions.has(name)) {
+function unknownName(name: string, span: Span, scope: TypeScope): Diagnostic {
+  if (isBuiltIn(name) || scope.functions.has(name)) {
     return error('NAME_UNKNOWN', span, `\`${name}\` is a function, and stands without arguments`, {
       hints: [`write its arguments in brackets: \`${name}(…)\``],
     });
@@ -26,14 +32,29 @@ export function unknownFunction(name: string, span: Span, scope: TypeScope): Dia
       hints: [`a product is written with \`*\`: \`${name}*(…)\``],
     });
   }
-  const near = nearest(name, [...MATHEMATICS.keys(), ...scope.functions.keys()], 3);
+  const near = nearest(name, [...BUILT_IN_NAMES, ...scope.functions.keys()], 3);
   const hint = near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : '`antinode functions` lists all functions';
   return error('FUNCTION_UNKNOWN', span, `there is no function \`${name}\``, { hints: [hint] });
 }
 
-export function gasAsValue(name: string, span: Span): Diagnostic {
+function gasAsValue(name: string, span: Span): Diagnostic {
   return error('EXPRESSION_NOT_ALLOWED', span, `\`${name}\` is a gas, and has no value of its own`, {
     hints: [`a gas stands as an argument: \`molar_mass(${name})\``],
+  });
+}
+
+function tableAsValue(name: string, span: Span): Diagnostic {
+  return error('EXPRESSION_NOT_ALLOWED', span, `\`${name}\` is a table, and has no value of its own`, {
+    hints: [`a table is read at a point: \`interpolate(${name}, x)\``],
+  });
+}
+
+export function unknownTable(name: string, span: Span, { tables }: TypeScope): Diagnostic {
+  const near = nearest(name, tables.keys(), 3);
+  const known = near.length > 0 ? near : [...tables.keys()].slice(0, 5);
+  const hint = near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : `the sheet has \`${known.join('`, `')}\``;
+  return error('NAME_UNKNOWN', span, `the sheet has no table \`${name}\``, {
+    hints: [known.length > 0 ? hint : 'define it under `tables`'],
   });
 }
 

@@ -4,7 +4,10 @@ import { describeType } from '../units/dimensions.ts';
 import { fromSi } from '../units/convert.ts';
 import { CORE_VERSION } from '../version.ts';
 import { cautionsFor } from './cautions.ts';
-import { ATMOSPHERE_PATH } from './draft.ts';
+import { nested } from '../axes/column.ts';
+import { ATMOSPHERE_PATH, type DraftContext } from './draft.ts';
+import { reportAxis } from './figure-drafts.ts';
+import { valueOf } from './values.ts';
 import type { EvaluatedSheet, Value } from './evaluated-sheet.ts';
 import { makeBlocks } from './make-blocks.ts';
 import type { Block, CheckBlock, CheckResult, Hold, Quantity, Report } from './model.ts';
@@ -13,12 +16,12 @@ import type { Block, CheckBlock, CheckResult, Hold, Quantity, Report } from './m
  * Makes the canonical report of an evaluated sheet: plain JSON, with printed digits, TeX, sources and digests.
  *
  * @param sheet       all values known, no error standing
- * @param lineOf      line (from 1) of an offset in the sheet's file
+ * @param lineOf      line (from 1) of a place in the sheet's files
  * @param diagnostics the warnings that the report records
  */
 export function buildReport(
   sheet: EvaluatedSheet,
-  lineOf: (offset: number) => number,
+  lineOf: DraftContext['lineOf'],
   diagnostics: readonly LocatedDiagnostic[],
 ): Report {
   const sections = makeBlocks(sheet, lineOf);
@@ -44,6 +47,7 @@ export function buildReport(
       holds: holds.length,
       governing: governingCheck(checks),
     },
+    axes: [...sheet.axes.values()].map(reportAxis),
     quantities: collectQuantities(sheet, blocks),
     checks: checks.map(checkResult),
     holds,
@@ -72,7 +76,7 @@ function sheetDigest(sheet: EvaluatedSheet, blocks: readonly Block[]): string {
 
 function collectHolds(blocks: readonly Block[]): Hold[] {
   return blocks.flatMap((block) =>
-    block.block === 'input' && block.hold !== undefined
+    (block.block === 'input' || block.block === 'column') && block.hold !== undefined
       ? [{ path: block.path, name: block.name, label: block.label, reason: block.hold }]
       : [],
   );
@@ -80,8 +84,8 @@ function collectHolds(blocks: readonly Block[]): Hold[] {
 
 /** The check with the highest utilisation, among those that have one. */
 function governingCheck(checks: readonly CheckBlock[]): Report['summary']['governing'] {
-  const rated = checks.flatMap(({ path, label, utilisation }) =>
-    utilisation === null ? [] : [{ path, label, utilisation }],
+  const rated = checks.flatMap(({ path, label, utilisation, at }) =>
+    utilisation === null ? [] : [{ path, label, utilisation, ...(at === undefined ? {} : { at }) }],
   );
   return rated.reduce<Report['summary']['governing']>(
     (worst, check) => (worst === null || check.utilisation > worst.utilisation ? check : worst),
@@ -89,27 +93,34 @@ function governingCheck(checks: readonly CheckBlock[]): Report['summary']['gover
   );
 }
 
+/** The values of all names, in the order of the blocks; the atmosphere is a block, but not a name of the sheet. */
 function collectQuantities(sheet: EvaluatedSheet, blocks: readonly Block[]): Record<string, Quantity> {
   const quantities: Record<string, Quantity> = {};
   for (const block of blocks) {
-    // The atmosphere is a block, but not a name of the sheet.
-    if ((block.block !== 'input' && block.block !== 'step') || block.path === ATMOSPHERE_PATH) continue;
-    const input = sheet.inputs.get(block.name);
-    const value = (input ?? sheet.steps.get(block.name))?.value;
-    if (value === undefined) throw new Error(`no value for ${block.path}`);
-    const number = input?.typed?.number ?? fromSi(value.si, value.unit, sheet.site);
-    quantities[block.name] = quantity(block, value, number);
+    if (block.block !== 'input' && block.block !== 'step' && block.block !== 'taken') continue;
+    if (block.path === ATMOSPHERE_PATH) continue;
+    const named = valueOf(block.name, sheet);
+    if (named === undefined) throw new Error(`no value for ${block.path}`);
+    quantities[block.name] = quantity(block, named.value, named.typed?.number, sheet);
   }
   return quantities;
 }
 
-function quantity(block: Extract<Block, { block: 'input' | 'step' }>, value: Value, number: number): Quantity {
+function quantity(
+  block: Extract<Block, { block: 'input' | 'step' | 'taken' }>,
+  { type, column, unit }: Value,
+  typed: number | undefined,
+  { axes, site }: EvaluatedSheet,
+): Quantity {
   return {
-    value: number,
-    unit: value.unit.text,
-    si: value.si,
-    dimension: describeType(value.type),
-    axes: [],
+    value: (column.axes.length === 0 ? typed : undefined) ?? nested(column, axes, (si) => fromSi(si, unit, site)),
+    unit: unit.text,
+    si: nested(column, axes, (si) => si),
+    dimension: describeType(type),
+    axes: column.axes.flatMap((name) => {
+      const axis = axes.get(name);
+      return axis === undefined ? [] : [reportAxis(axis)];
+    }),
     label: block.label,
     digest: block.digest,
     printed: block.printed,
@@ -117,6 +128,6 @@ function quantity(block: Extract<Block, { block: 'input' | 'step' }>, value: Val
   };
 }
 
-function checkResult({ path, that, label, status, utilisation }: CheckBlock): CheckResult {
-  return { path, that, label, status, utilisation, governing: {} };
+function checkResult({ path, that, label, status, utilisation, governing }: CheckBlock): CheckResult {
+  return { path, that, label, status, utilisation, governing };
 }

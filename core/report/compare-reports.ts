@@ -1,4 +1,5 @@
-import type { Block, Quantity, Report } from './model.ts';
+import type { Nested } from '../axes/column.ts';
+import type { Block, FigureBlock, Quantity, Report } from './model.ts';
 
 /** One place in which two reports differ, as a person reads it. */
 export interface ReportDifference {
@@ -63,10 +64,23 @@ function compareBlocks(yours: Report, ours: Report): ReportDifference[] {
 }
 
 function sameBlock(a: Block, b: Block): boolean {
+  if (a.block === 'figure' && b.block === 'figure') return sameFigure(a, b);
   if (a.block !== 'check' || b.block !== 'check') return same(a, b);
   const { utilisation: utilisationA, ...restA } = a;
   const { utilisation: utilisationB, ...restB } = b;
   return closeOrNull(utilisationA, utilisationB) && same(restA, restB);
+}
+
+/** What a figure draws are numbers, compared as such; all its words must be the same. */
+function sameFigure(a: FigureBlock, b: FigureBlock): boolean {
+  const { series: seriesA, limit: limitA, ...restA } = a;
+  const { series: seriesB, limit: limitB, ...restB } = b;
+  const words = ({ series, limit }: FigureBlock): unknown => [series.map(({ label }) => label), limit?.formula ?? null];
+  const values = (series: FigureBlock['series'], limit: FigureBlock['limit']): Nested => [
+    ...series.map((line) => line.values),
+    limit?.values ?? [],
+  ];
+  return same(restA, restB) && same(words(a), words(b)) && close(values(seriesA, limitA), values(seriesB, limitB));
 }
 
 function compareSummaries(yours: Report, ours: Report): ReportDifference[] {
@@ -98,8 +112,12 @@ function union(a: readonly string[], b: readonly string[]): string[] {
   return [...new Set([...a, ...b])];
 }
 
-function close(a: number, b: number): boolean {
-  return a === b || Math.abs(a - b) <= RERUN_TOLERANCE * Math.max(Math.abs(a), Math.abs(b));
+/** Equal within the tolerance; arrays of numbers are compared one by one. */
+function close(a: Nested, b: Nested): boolean {
+  if (typeof a === 'number' && typeof b === 'number')
+    return a === b || Math.abs(a - b) <= RERUN_TOLERANCE * Math.max(Math.abs(a), Math.abs(b));
+  if (typeof a === 'number' || typeof b === 'number') return false;
+  return a.length === b.length && a.every((part, i) => close(part, b[i] ?? Number.NaN));
 }
 
 function closeOrNull(a: number | null, b: number | null): boolean {
@@ -120,7 +138,9 @@ function same(a: unknown, b: unknown): boolean {
 }
 
 function show(quantity: Quantity | undefined): string {
-  return quantity === undefined ? 'absent' : `${quantity.printed.number} ${quantity.printed.unit} (${quantity.si} SI)`;
+  if (quantity === undefined) return 'absent';
+  const { printed, si } = quantity;
+  return `${printed.number} ${printed.unit} (${typeof si === 'number' ? si : 'several values in'} SI)`;
 }
 
 function showBlock(block: Block | undefined): string {

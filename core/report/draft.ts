@@ -1,4 +1,5 @@
-import type { Annotations, Text } from '../sheet/document.ts';
+import type { Annotations, SheetDocument, Text } from '../sheet/document.ts';
+import type { Shape } from '../axes/shape.ts';
 import type { Printed } from '../units/printed.ts';
 import type { EvaluatedSheet } from './evaluated-sheet.ts';
 import type { Block } from './model.ts';
@@ -12,21 +13,28 @@ export interface Draft {
   readonly uses: readonly string[];
 }
 
+/** One case of a formula over axes: the one whose numbers are put in. */
+export interface Case {
+  readonly axes: Shape;
+  readonly cell: number;
+}
+
 /** What the drafts of all blocks are made from. */
 export interface DraftContext {
   readonly sheet: EvaluatedSheet;
-  /** Line (from 1) of an offset in the sheet's file. */
-  readonly lineOf: (offset: number) => number;
+  /** Line (from 1) of a place. */
+  readonly lineOf: (at: Text['span']) => number;
   /** Path of the block that defines a name. */
   readonly pathOf: (name: string) => string | undefined;
   readonly symbolOf: (name: string) => string;
-  readonly printedOf: (name: string) => Printed | undefined;
+  /** The value of a name as formulas compute with it, in one case where it has several. */
+  readonly printedOf: (name: string, one: Case) => Printed | undefined;
 }
 
 export const ATMOSPHERE_PATH = 'atmosphere';
 
 export function place(at: Text, context: DraftContext): { file: string; line: number } {
-  return { file: context.sheet.document.file, line: context.lineOf(at.span.start) };
+  return { file: at.span.file, line: context.lineOf(at.span) };
 }
 
 /** Label, note and source of a block; the name stands in for a label that is not given. */
@@ -43,8 +51,11 @@ export function annotations(
   };
 }
 
-export function sourceText(id: string, context: DraftContext): string | undefined {
-  return context.sheet.document.sources.find((source) => source.id.text === id)?.text.text;
+export function sourceText(
+  id: string,
+  { sheet }: { readonly sheet: { readonly document: SheetDocument } },
+): string | undefined {
+  return sheet.document.sources.find((source) => source.id.text === id)?.text.text;
 }
 
 /** What of an annotation counts as the block's own text. Null where it is not given, as canonical JSON knows no undefined. */

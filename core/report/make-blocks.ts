@@ -1,13 +1,17 @@
+import { projectCell } from '../axes/shape.ts';
 import { symbolFor } from '../expression/tex-symbol.ts';
-import { absoluteUnit } from '../units/display.ts';
-import { printQuantity } from '../units/print.ts';
+import type { Text } from '../sheet/document.ts';
 import type { Printed } from '../units/printed.ts';
-import { assumptionDraft, atmosphereDraft, gasDraft, inputDraft, printInput, printOptions } from './basis-drafts.ts';
+import { atmosphereDraft, gasDraft, inputDraft, lookupDraft, statementDraft, takenDraft } from './basis-drafts.ts';
 import { blockDigests } from './block-digests.ts';
-import type { Draft, DraftContext } from './draft.ts';
+import { columnDraft } from './condition-drafts.ts';
+import type { Case, Draft, DraftContext } from './draft.ts';
 import type { EvaluatedSheet } from './evaluated-sheet.ts';
-import type { Block, ReportSection } from './model.ts';
+import { figureDraft, tableDraft } from './figure-drafts.ts';
+import type { Block, ReportSection, StatementBlock } from './model.ts';
+import { inAbsolute, printCell, printInput, printValue } from './print-value.ts';
 import { checkDraft, stepDraft, textDraft } from './section-drafts.ts';
+import { valueOf } from './values.ts';
 
 interface DraftSection {
   readonly path: string;
@@ -16,9 +20,11 @@ interface DraftSection {
 }
 
 /** All blocks of a sheet in reading order, section by section, each with its digest. */
-export function makeBlocks(sheet: EvaluatedSheet, lineOf: (offset: number) => number): readonly ReportSection[] {
+export function makeBlocks(sheet: EvaluatedSheet, lineOf: DraftContext['lineOf']): readonly ReportSection[] {
   const context = makeContext(sheet, lineOf);
-  const sections = [...basisSections(context), ...ownSections(context)].filter(({ drafts }) => drafts.length > 0);
+  const sections = [...basisSections(context), ...ownSections(context), ...closingSections(context)].filter(
+    ({ drafts }) => drafts.length > 0,
+  );
   const digests = digestsOf(sections.flatMap(({ drafts }) => drafts));
   return sections.map(({ path, title, drafts }) => {
     const blocks = drafts.map((draft) => withDigest(draft, digests));
@@ -29,6 +35,8 @@ export function makeBlocks(sheet: EvaluatedSheet, lineOf: (offset: number) => nu
 function basisSections(context: DraftContext): DraftSection[] {
   const { sheet } = context;
   const { document } = sheet;
+  const statements = (kind: StatementBlock['block'], texts: readonly Text[]): Draft[] =>
+    texts.map((text, i) => statementDraft(kind, text, i + 1, context));
   return [
     {
       path: 'inputs',
@@ -38,17 +46,25 @@ function basisSections(context: DraftContext): DraftSection[] {
         ...[...sheet.inputs.values()].map((input) => inputDraft(input, context)),
       ],
     },
-    { path: 'gases', title: 'Gases', drafts: sheet.gases.map((gas) => gasDraft(gas, context)) },
     {
-      path: 'assumptions',
-      title: 'Assumptions',
-      drafts: document.assumptions.map((text, i) => assumptionDraft(text, i + 1, context)),
+      path: 'taken',
+      title: 'Taken from other sheets',
+      drafts: [...sheet.taken.values()].map((taken) => takenDraft(taken, context)),
     },
+    {
+      path: 'conditions',
+      title: 'Operating conditions',
+      drafts: sheet.columns.map((column) => columnDraft(column, context)),
+    },
+    { path: 'gases', title: 'Gases', drafts: sheet.gases.map((gas) => gasDraft(gas, context)) },
+    { path: 'tables', title: 'Tables', drafts: sheet.lookups.map((lookup) => lookupDraft(lookup, context)) },
+    { path: 'assumptions', title: 'Assumptions', drafts: statements('assumption', document.assumptions) },
+    { path: 'exclusions', title: 'Exclusions', drafts: statements('exclusion', document.exclusions) },
   ];
 }
 
 function ownSections(context: DraftContext): DraftSection[] {
-  const { document, steps, checks } = context.sheet;
+  const { document, steps, checks, figures } = context.sheet;
   return document.sections.map((section, i) => {
     const path = `sections/${i + 1}`;
     const drafts = [
@@ -56,6 +72,11 @@ function ownSections(context: DraftContext): DraftSection[] {
       ...section.steps.flatMap((node) => {
         const step = steps.get(node.name.text);
         return step === undefined ? [] : [stepDraft(`${path}/steps/${node.name.text}`, step, context)];
+      }),
+      ...section.tables.map((node, n) => tableDraft(`${path}/tables/${n + 1}`, node, context)),
+      ...section.figures.flatMap((node, n) => {
+        const figure = figures.get(node);
+        return figure === undefined ? [] : [figureDraft(`${path}/figures/${n + 1}`, figure, context)];
       }),
       ...section.checks.flatMap((node, n) => {
         const check = checks.get(node);
@@ -66,7 +87,13 @@ function ownSections(context: DraftContext): DraftSection[] {
   });
 }
 
-function makeContext(sheet: EvaluatedSheet, lineOf: (offset: number) => number): DraftContext {
+/** For further reading: behind all that the sheet rests on. */
+function closingSections(context: DraftContext): DraftSection[] {
+  const drafts = context.sheet.document.references.map((text, i) => statementDraft('reference', text, i + 1, context));
+  return [{ path: 'references', title: 'References', drafts }];
+}
+
+function makeContext(sheet: EvaluatedSheet, lineOf: DraftContext['lineOf']): DraftContext {
   const paths = pathsByName(sheet);
   const symbols = symbolsByName(sheet);
   const context: DraftContext = {
@@ -74,35 +101,58 @@ function makeContext(sheet: EvaluatedSheet, lineOf: (offset: number) => number):
     lineOf,
     pathOf: (name) => paths.get(name),
     symbolOf: (name) => symbols.get(name) ?? symbolFor(name),
-    printedOf: (name) => printedValue(name, context),
+    printedOf: (name, one) => printedValue(name, one, context),
   };
   return context;
 }
 
-function pathsByName({ document, gases }: EvaluatedSheet): ReadonlyMap<string, string> {
+function pathsByName({ document, gases, taken, columns, lookups }: EvaluatedSheet): ReadonlyMap<string, string> {
+  const under = (folder: string, nodes: Iterable<{ readonly name: Text }>): [string, string][] =>
+    Array.from(nodes, ({ name }) => [name.text, `${folder}/${name.text}`]);
   return new Map([
-    ...gases.map(({ node }) => [node.name.text, `gases/${node.name.text}`] as const),
-    ...document.inputs.map(({ name }) => [name.text, `inputs/${name.text}`] as const),
-    ...document.sections.flatMap(({ steps }, i) =>
-      steps.map(({ name }) => [name.text, `sections/${i + 1}/steps/${name.text}`] as const),
+    ...under(
+      'gases',
+      gases.map(({ node }) => node),
     ),
+    ...under(
+      'tables',
+      lookups.map(({ node }) => node),
+    ),
+    ...under(
+      'taken',
+      [...taken.values()].map(({ node }) => node),
+    ),
+    ...under(
+      'conditions',
+      columns.map(({ node }) => node),
+    ),
+    ...under('inputs', document.inputs),
+    ...document.sections.flatMap(({ steps }, i) => under(`sections/${i + 1}/steps`, steps)),
   ]);
 }
 
 function symbolsByName({ document }: EvaluatedSheet): ReadonlyMap<string, string> {
-  const named = [...document.inputs, ...document.sections.flatMap(({ steps }) => steps)];
+  const { inputs, take, lookups, conditions, sections } = document;
+  const named = [
+    ...inputs,
+    ...take,
+    ...lookups,
+    ...(conditions?.columns ?? []),
+    ...sections.flatMap(({ steps }) => steps),
+  ];
   return new Map(named.map(({ name, symbol }) => [name.text, symbolFor(name.text, symbol?.text)]));
 }
 
-/** As {@link printInput}, but gauge readings as the absolute pressures with which formulas compute. */
-function printedValue(name: string, context: DraftContext): Printed | undefined {
-  const input = context.sheet.inputs.get(name);
-  const step = context.sheet.steps.get(name);
-  const value = (input ?? step)?.value;
-  if (value === undefined) return undefined;
-  const digits = (input ?? step)?.node.digits;
-  if (input !== undefined && !value.unit.gauge) return printInput(value, input.typed, digits, context);
-  return printQuantity(value.si, absoluteUnit(value.unit), printOptions(digits, context));
+/** The value with which formulas compute, in one case: a gauge reading as the absolute pressure that it is. */
+function printedValue(name: string, one: Case, context: DraftContext): Printed | undefined {
+  const named = valueOf(name, context.sheet);
+  if (named === undefined) return undefined;
+  const { value, typed, digits } = named;
+  if (typed !== null && !value.unit.gauge && value.column.axes.length === 0)
+    return printInput(value, typed, digits, context);
+  const cell = projectCell(one.cell, one.axes, value.column.axes, context.sheet.axes);
+  const absolute = inAbsolute(value);
+  return cell === null ? printValue(absolute, digits, context) : printCell(absolute, cell, digits, context);
 }
 
 function digestsOf(drafts: readonly Draft[]): ReadonlyMap<string, string> {

@@ -1,4 +1,5 @@
 import type { LocatedDiagnostic } from '../diagnostics/located-diagnostic.ts';
+import type { Nested } from '../axes/column.ts';
 import type { Printed } from '../units/printed.ts';
 
 export type { LocatedDiagnostic, Printed };
@@ -6,14 +7,21 @@ export type { LocatedDiagnostic, Printed };
 /** `sha256-` and 64 hexadecimal digits. */
 export type Digest = string;
 
+/** An axis of the sheet: ids of operating conditions, or values in a unit. */
+export interface ReportAxis {
+  readonly name: string;
+  readonly values: readonly (string | number)[];
+  readonly unit?: string;
+}
+
 /** One value of the sheet. `si` and `value` are numbers, or nested arrays where `axes` is not empty. */
 export interface Quantity {
-  readonly value: number;
+  readonly value: Nested;
   readonly unit: string;
-  readonly si: number;
+  readonly si: Nested;
   /** Name of the dimension and kind: `force`, `pressure level`, `pressure difference`. */
   readonly dimension: string;
-  readonly axes: readonly { readonly name: string; readonly values: readonly (string | number)[] }[];
+  readonly axes: readonly ReportAxis[];
   readonly label: string;
   readonly digest: Digest;
   readonly printed: Printed;
@@ -33,7 +41,26 @@ interface BlockBase {
   readonly place: { readonly file: string; readonly line: number };
 }
 
-export interface InputBlock extends BlockBase {
+/** The least or the greatest of the values over some axes, and where it is: `C07, 1130 rpm`. */
+export interface Extreme {
+  readonly printed: Printed;
+  readonly at: string;
+}
+
+/** What a block over axes says of all its values. */
+interface Spread {
+  /** Names of the axes, outermost first; not there for a single value. */
+  readonly axes?: readonly string[];
+  readonly extent?: { readonly least: Extreme; readonly greatest: Extreme };
+}
+
+/** The range in which an experienced engineer would believe a value, as typed, and whether the value lies in it. */
+export interface Expectation {
+  readonly range: string;
+  readonly within: boolean;
+}
+
+export interface InputBlock extends BlockBase, Spread {
   readonly block: 'input';
   readonly name: string;
   /** TeX. */
@@ -42,9 +69,44 @@ export interface InputBlock extends BlockBase {
   readonly typed: string;
   readonly printed: Printed;
   readonly hold?: string;
+  /** Of a column of the operating conditions: the printed value of each. */
+  readonly cells?: readonly string[];
+  /** How far it may be off, as typed. */
+  readonly tolerance?: string;
+  readonly expect?: Expectation;
 }
 
-export interface StepBlock extends BlockBase {
+/** A column of gases or of words among the operating conditions. */
+export interface ColumnBlock extends BlockBase {
+  readonly block: 'column';
+  readonly name: string;
+  readonly holds: 'gas' | 'text';
+  readonly cells: readonly string[];
+  readonly hold?: string;
+}
+
+/** A value of another sheet's revision. */
+export interface TakenBlock extends BlockBase, Spread {
+  readonly block: 'taken';
+  readonly name: string;
+  readonly symbol: string;
+  /** `TH3-C-102@0#T_d`. */
+  readonly from: string;
+  /** Digest of the report that the value was taken from. */
+  readonly revision: string;
+  readonly printed: Printed;
+}
+
+/** A table that formulas interpolate in. */
+export interface LookupBlock extends BlockBase {
+  readonly block: 'lookup';
+  readonly name: string;
+  readonly symbol: string;
+  readonly columns: readonly { readonly name: string; readonly unit: string }[];
+  readonly rows: readonly (readonly string[])[];
+}
+
+export interface StepBlock extends BlockBase, Spread {
   readonly block: 'step';
   readonly name: string;
   readonly symbol: string;
@@ -54,6 +116,9 @@ export interface StepBlock extends BlockBase {
   readonly formula: string;
   readonly substituted: string;
   readonly printed: Printed;
+  /** The case whose numbers are put in, where there are several. */
+  readonly at?: string;
+  readonly expect?: Expectation;
   /** Paths of the blocks it reads directly. */
   readonly uses: readonly string[];
   /** Names of library functions it calls, with their published source. */
@@ -70,31 +135,85 @@ export interface CheckBlock extends BlockBase {
   readonly utilisation: number | null;
   /** `within`, `close` (0.90 to 1.00) or `over`. */
   readonly standing: 'within' | 'close' | 'over';
+  /** Names of the axes, outermost first; not there for a single value. */
+  readonly axes?: readonly string[];
+  /** Where it governs, by axis; empty without axes. */
+  readonly governing: Readonly<Record<string, string | number>>;
+  /** The same in words: `C07, 1130 rpm`. */
+  readonly at?: string;
+  /** How many points there are, and at how many it fails; not there for a single value. */
+  readonly points?: { readonly all: number; readonly failed: number };
   readonly uses: readonly string[];
 }
 
 export interface TextBlock extends BlockBase {
   readonly block: 'text';
-  /** Markdown with formulas between dollar signs. */
+  /** Markdown with formulas between dollar signs; values stand in the place of their names. */
   readonly markdown: string;
+  /** Paths of the blocks whose values it shows. */
+  readonly uses: readonly string[];
+}
+
+/** Quantities side by side, row by row along an axis. */
+export interface TableBlock extends BlockBase {
+  readonly block: 'table';
+  /** Name of the axis; not there where all columns are single values, in one row. */
+  readonly axis?: string;
+  readonly columns: readonly {
+    readonly name: string;
+    readonly label: string;
+    readonly symbol: string;
+    readonly unit: string;
+  }[];
+  readonly rows: readonly { readonly at: string; readonly cells: readonly string[] }[];
+  readonly uses: readonly string[];
+}
+
+/** A quantity over one axis or two, ready to be drawn. */
+export interface FigureBlock extends BlockBase {
+  readonly block: 'figure';
+  readonly kind: 'line' | 'spectrum' | 'matrix' | 'wave' | 'profile';
+  /** TeX of what is shown. */
+  readonly formula: string;
+  readonly unit: string;
+  readonly x: ReportAxis;
+  /** One series for each point of the second axis; one without a label where there is none. */
+  readonly series: readonly { readonly label: string; readonly values: readonly number[] }[];
+  readonly seriesAxis?: string;
+  /** What it is held against: one value, or one for each point of `x`. */
+  readonly limit?: { readonly formula: string; readonly values: readonly number[] };
+  readonly greatest: Extreme;
+  readonly uses: readonly string[];
 }
 
 export interface GasBlock extends BlockBase {
   readonly block: 'gas';
   readonly name: string;
   readonly method: string;
-  readonly fractions: readonly { readonly component: string; readonly percent: string }[];
+  readonly fractions: readonly { readonly component: string; readonly percent: string; readonly tolerance?: string }[];
 }
 
-export interface AssumptionBlock extends BlockBase {
-  readonly block: 'assumption';
+/** A statement: what is assumed, what is left out, or a document for further reading. */
+export interface StatementBlock extends BlockBase {
+  readonly block: 'assumption' | 'exclusion' | 'reference';
   readonly text: string;
 }
 
-export type Block = InputBlock | StepBlock | CheckBlock | TextBlock | GasBlock | AssumptionBlock;
+export type Block =
+  | InputBlock
+  | ColumnBlock
+  | TakenBlock
+  | LookupBlock
+  | StepBlock
+  | CheckBlock
+  | TextBlock
+  | TableBlock
+  | FigureBlock
+  | GasBlock
+  | StatementBlock;
 
 export interface ReportSection {
-  /** `inputs`, `gases`, `assumptions`, or `sections/1`. */
+  /** `inputs`, `taken`, `conditions`, `gases`, `tables`, `assumptions`, `exclusions`, `references`, or `sections/1`. */
   readonly path: string;
   readonly title: string;
   readonly blocks: readonly Block[];
@@ -136,8 +255,14 @@ export interface Report {
     readonly passed: number;
     readonly failed: number;
     readonly holds: number;
-    readonly governing: { readonly path: string; readonly label: string; readonly utilisation: number } | null;
+    readonly governing: {
+      readonly path: string;
+      readonly label: string;
+      readonly utilisation: number;
+      readonly at?: string;
+    } | null;
   };
+  readonly axes: readonly ReportAxis[];
   readonly quantities: Readonly<Record<string, Quantity>>;
   readonly checks: readonly CheckResult[];
   readonly holds: readonly Hold[];

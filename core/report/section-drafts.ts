@@ -1,26 +1,32 @@
+import { extremes } from '../axes/column.ts';
+import { cellPoint, cellText } from '../axes/points.ts';
 import { functionsIn, namesIn } from '../expression/names.ts';
 import { comparisonTex, expressionTex, type TexOptions } from '../expression/tex.ts';
 import type { Expression } from '../expression/tree.ts';
 import type { Text } from '../sheet/document.ts';
-import { printQuantity } from '../units/print.ts';
-import { printOptions } from './basis-drafts.ts';
+import { expectation } from './basis-drafts.ts';
 import {
   annotationContent,
   annotations,
   ATMOSPHERE_PATH,
   place,
   plainText,
+  type Case,
   type Draft,
   type DraftContext,
 } from './draft.ts';
 import type { EvaluatedCheck, EvaluatedStep } from './evaluated-sheet.ts';
 import type { CheckBlock, StepBlock } from './model.ts';
+import { printValue, spreadOf } from './print-value.ts';
+import { fillText } from './fill-text.ts';
 
 export function textDraft(path: string, text: Text, context: DraftContext): Draft {
+  const { markdown, names } = fillText(text.text, context);
+  const uses = names.flatMap((name) => context.pathOf(name) ?? []);
   return {
-    block: { block: 'text', path, label: 'Text', markdown: text.text, place: place(text, context) },
+    block: { block: 'text', path, label: 'Text', markdown, uses, place: place(text, context) },
     content: { block: 'text', text: text.text.trim() },
-    uses: [],
+    uses,
   };
 }
 
@@ -28,6 +34,7 @@ export function stepDraft(path: string, { node, formula, value }: EvaluatedStep,
   const name = node.name.text;
   const { expression } = formula;
   const uses = usedPaths([expression], value.unit.gauge, context);
+  const one = largestCase(value.column);
   return {
     block: {
       block: 'step',
@@ -37,8 +44,11 @@ export function stepDraft(path: string, { node, formula, value }: EvaluatedStep,
       symbol: context.symbolOf(name),
       calc: plainText(node.calc.text),
       formula: expressionTex(expression, symbolic(context)),
-      substituted: expressionTex(expression, substituted(context)),
-      printed: printQuantity(value.si, value.unit, printOptions(node.digits, context)),
+      substituted: expressionTex(expression, substituted(one, context)),
+      ...caseText(one, context),
+      printed: printValue(value, node.digits, context),
+      ...spreadOf(value, node.digits, context),
+      ...expectation(node, context),
       uses,
       methods: methodsOf(expression, context),
       place: place(node.name, context),
@@ -48,14 +58,26 @@ export function stepDraft(path: string, { node, formula, value }: EvaluatedStep,
       name,
       calc: plainText(node.calc.text),
       unit: node.unit?.text ?? null,
+      expect: node.expect?.text ?? null,
       annotations: annotationContent(node, context),
     },
     uses,
   };
 }
 
+/** Of several cases, the numbers of the one with the largest magnitude are put in: it is the one that is asked about. */
+function largestCase(column: EvaluatedStep['value']['column']): Case {
+  const { least, greatest } = extremes(column);
+  const magnitude = (cell: number): number => Math.abs(column.data[cell] ?? 0);
+  return { axes: column.axes, cell: magnitude(least) > magnitude(greatest) ? least : greatest };
+}
+
+function caseText({ axes, cell }: Case, { sheet }: DraftContext): { at?: string } {
+  return axes.length === 0 ? {} : { at: cellText(cell, axes, sheet.axes) };
+}
+
 export function checkDraft(path: string, check: EvaluatedCheck, context: DraftContext): Draft {
-  const { node, comparison, utilisation } = check;
+  const { node, comparison, utilisation, axes, cell, failures } = check;
   const that = plainText(node.that.text);
   const uses = usedPaths([comparison.left, comparison.right], false, context);
   return {
@@ -65,10 +87,13 @@ export function checkDraft(path: string, check: EvaluatedCheck, context: DraftCo
       ...annotations(node, that, context),
       that,
       formula: comparisonTex(comparison, symbolic(context)),
-      substituted: comparisonTex(comparison, substituted(context)),
+      substituted: comparisonTex(comparison, substituted({ axes, cell }, context)),
       status: check.passes ? 'pass' : 'fail',
       utilisation,
       standing: standing(check),
+      governing: cellPoint(cell, axes, context.sheet.axes),
+      ...(axes.length === 0 ? {} : { axes, points: { all: check.cells, failed: failures } }),
+      ...caseText({ axes, cell }, context),
       uses,
       place: place(node.that, context),
     },
@@ -77,12 +102,12 @@ export function checkDraft(path: string, check: EvaluatedCheck, context: DraftCo
   };
 }
 
-function symbolic({ symbolOf, sheet }: DraftContext): TexOptions {
+export function symbolic({ symbolOf, sheet }: DraftContext): TexOptions {
   return { nameTex: symbolOf, functions: sheet.functions };
 }
 
-function substituted(context: DraftContext): TexOptions {
-  return { ...symbolic(context), printed: context.printedOf };
+function substituted(one: Case, context: DraftContext): TexOptions {
+  return { ...symbolic(context), printed: (name) => context.printedOf(name, one) };
 }
 
 /** From 0.90 on a check is close to its limit, and says so. */
@@ -94,7 +119,7 @@ function standing({ passes, utilisation }: EvaluatedCheck): CheckBlock['standing
 }
 
 /** Paths of the blocks whose values or gases an expression reads, in order of appearance. */
-function usedPaths(expressions: readonly Expression[], gauge: boolean, context: DraftContext): string[] {
+export function usedPaths(expressions: readonly Expression[], gauge: boolean, context: DraftContext): string[] {
   const names = expressions.flatMap((expression) => [...namesIn(expression)]);
   const paths = names.flatMap((name) => context.pathOf(name) ?? []);
   return [...new Set(gauge ? [...paths, ATMOSPHERE_PATH] : paths)];

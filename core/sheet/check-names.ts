@@ -5,7 +5,13 @@ import { LIMITS } from './limits.ts';
 
 /** What the schema cannot say: names that are defined twice, sources that are not listed, inputs without an origin. */
 export function checkNames(document: SheetDocument): Diagnostic[] {
-  return [...tooMany(document), ...duplicates(document), ...unknownSources(document), ...withoutOrigin(document)];
+  return [
+    ...tooMany(document),
+    ...duplicates(namedNodes(document)),
+    ...duplicates(document.sources.map(({ id }) => id)),
+    ...unknownSources(document),
+    ...withoutOrigin(document),
+  ];
 }
 
 function tooMany({ inputs, sections, number }: SheetDocument): Diagnostic[] {
@@ -15,10 +21,15 @@ function tooMany({ inputs, sections, number }: SheetDocument): Diagnostic[] {
   return [error('LIMIT_EXCEEDED', number.span, message, { hints: ['split the sheet'] })];
 }
 
-/** Gases, inputs and steps share one space of names, since formulas use them all alike. */
-function duplicates({ gases, inputs, sections }: SheetDocument): Diagnostic[] {
+/** Gases, tables, inputs and steps share one space of names, since formulas use them all alike. */
+function namedNodes({ gases, lookups, take, inputs, conditions, sections }: SheetDocument): Text[] {
+  const columns = conditions?.columns ?? [];
+  const steps = sections.flatMap((section) => section.steps);
+  return [...gases, ...lookups, ...take, ...inputs, ...columns, ...steps].map(({ name }) => name);
+}
+
+function duplicates(named: readonly Text[]): Diagnostic[] {
   const first = new Map<string, Text>();
-  const named = [...gases, ...inputs, ...sections.flatMap(({ steps }) => steps)].map(({ name }) => name);
   return named.flatMap((name) => {
     const earlier = first.get(name.text);
     if (earlier === undefined) {
@@ -35,9 +46,16 @@ function duplicates({ gases, inputs, sections }: SheetDocument): Diagnostic[] {
   });
 }
 
-function unknownSources({ sources, gases, inputs, sections }: SheetDocument): Diagnostic[] {
+function unknownSources({ sources, gases, lookups, inputs, conditions, sections }: SheetDocument): Diagnostic[] {
   const known = sources.map(({ id }) => id.text);
-  const blocks = [...gases, ...inputs, ...sections.flatMap(({ steps, checks }) => [...steps, ...checks])];
+  const columns = conditions?.columns ?? [];
+  const blocks = [
+    ...gases,
+    ...lookups,
+    ...inputs,
+    ...columns,
+    ...sections.flatMap(({ steps, checks }) => [...steps, ...checks]),
+  ];
   return blocks.flatMap(({ source }) => {
     if (source === undefined || known.includes(source.text)) return [];
     const near = nearest(source.text, known);
@@ -49,8 +67,9 @@ function unknownSources({ sources, gases, inputs, sections }: SheetDocument): Di
   });
 }
 
-function withoutOrigin({ inputs }: SheetDocument): Diagnostic[] {
-  return inputs
+function withoutOrigin({ inputs, conditions }: SheetDocument): Diagnostic[] {
+  const columns = (conditions?.columns ?? []).filter(({ unit }) => unit?.text !== 'text');
+  return [...inputs, ...columns]
     .filter(({ source, hold }) => source === undefined && hold === undefined)
     .map(({ name }) =>
       warning('SOURCE_MISSING', name.span, `the input \`${name.text}\` has neither a source nor a hold`, {

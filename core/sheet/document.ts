@@ -22,12 +22,61 @@ export interface InputNode extends Annotations {
   readonly name: Text;
   readonly value: Text;
   readonly hold?: Text;
+  /** How far the value may be off: a share or a difference, to both sides. */
+  readonly tolerance?: Text;
+  /** Least and greatest value that it may have. */
+  readonly range?: readonly [Text, Text];
+  /** Range in which an experienced engineer would believe it. */
+  readonly expect?: Text;
+}
+
+/** One quantity, gas or text for every operating condition. */
+export interface ConditionColumnNode extends Annotations {
+  readonly name: Text;
+  /** Unit of the cells that are bare numbers, or `gas`, or `text`. */
+  readonly unit?: Text;
+  readonly hold?: Text;
+  readonly cells: readonly Text[];
+}
+
+export interface ConditionsNode {
+  readonly ids: readonly Text[];
+  readonly columns: readonly ConditionColumnNode[];
+}
+
+/** A table of two columns that formulas read by `interpolate`. */
+export interface LookupNode extends Annotations {
+  readonly name: Text;
+  readonly columns: readonly { readonly name: Text; readonly unit: Text }[];
+  readonly rows: readonly (readonly Text[])[];
+}
+
+/** A value of another sheet's revision: `TH3-C-102@0#T_d`. */
+export interface TakeNode extends Annotations {
+  readonly name: Text;
+  readonly from: Text;
 }
 
 export interface StepNode extends Annotations {
   readonly name: Text;
   readonly calc: Text;
   readonly unit?: Text;
+  readonly expect?: Text;
+}
+
+export interface TableNode {
+  readonly title?: Text;
+  readonly of: readonly Text[];
+  readonly note?: Text;
+}
+
+export interface FigureNode {
+  readonly kind: Text;
+  readonly of: Text;
+  readonly limit?: Text;
+  readonly unit?: Text;
+  readonly title?: Text;
+  readonly note?: Text;
 }
 
 export interface CheckNode extends Annotations {
@@ -39,6 +88,8 @@ export interface SectionNode {
   readonly text?: Text;
   readonly steps: readonly StepNode[];
   readonly checks: readonly CheckNode[];
+  readonly tables: readonly TableNode[];
+  readonly figures: readonly FigureNode[];
 }
 
 export interface GasNode {
@@ -47,6 +98,8 @@ export interface GasNode {
   readonly fractions: readonly { readonly component: Text; readonly amount: Text }[];
   readonly source?: Text;
   readonly note?: Text;
+  /** How far the share of a component may be off. */
+  readonly tolerance: readonly { readonly component: Text; readonly amount: Text }[];
 }
 
 /**
@@ -59,8 +112,18 @@ export interface SheetDocument {
   readonly title: Text;
   readonly units: 'us' | 'si';
   readonly atmosphere?: Text;
+  /** Reference states of normal and standard volumes: `1.01325 bara, 0 degC`. */
+  readonly normal?: Text;
+  readonly standard?: Text;
+  /** Files whose definitions the sheet uses. */
+  readonly use: readonly Text[];
+  readonly take: readonly TakeNode[];
   readonly sources: readonly { readonly id: Text; readonly text: Text }[];
   readonly assumptions: readonly Text[];
+  readonly exclusions: readonly Text[];
+  readonly references: readonly Text[];
+  readonly conditions?: ConditionsNode;
+  readonly lookups: readonly LookupNode[];
   readonly gases: readonly GasNode[];
   readonly inputs: readonly InputNode[];
   readonly sections: readonly SectionNode[];

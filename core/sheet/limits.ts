@@ -8,4 +8,14 @@ export const LIMITS = {
   values: 50_000,
   /** Inputs and steps together. */
   names: 5_000,
+  /** Points along one axis. */
+  points: 20_000,
+  /** Values of all quantities over their axes. */
+  cells: 4_000_000,
+  /** Operations on single values: some seconds of computing on any machine. */
+  work: 1_000_000_000,
+  /** Characters of a value that is set from outside. */
+  override: 500,
+  /** Files that a sheet uses. */
+  files: 40,
 } as const;

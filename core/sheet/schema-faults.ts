@@ -1,30 +1,34 @@
 import type { ErrorObject } from 'ajv';
 import { error, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import { nearest } from '../diagnostics/nearest.ts';
-import { SHEET_SCHEMA } from './generated/sheet-schema.js';
+import { DEFINITIONS_SCHEMA, SHEET_SCHEMA } from './generated/sheet-schema.js';
+import { validateDefinitions } from './generated/validate-definitions.js';
 import { validateSheet } from './generated/validate-sheet.js';
 import type { Entry, EntryPair } from './read-yaml.ts';
 import type { SchemaNode } from './schema-node.ts';
 
 /** Keys of the sheet language that this version does not know yet: said so, instead of offering a near miss. */
-const LATER = [
-  'use',
-  'take',
-  'conditions',
-  'figures',
-  'table',
-  'machine',
-  'piping',
-  'analyses',
-  'tolerance',
-  'range',
-  'expect',
-];
+const LATER = ['machine', 'piping', 'analyses'];
 
-/** Holds the sheet against its JSON Schema; each fault in our own words, at the place where it stands. */
-export function schemaFaults(root: Entry): Diagnostic[] {
-  if (validateSheet(plainValue(root))) return [];
-  return (validateSheet.errors ?? []).flatMap((fault) => describe(fault, root) ?? []);
+/** A sheet, or a file of definitions that sheets use. */
+export type DocumentKind = 'sheet' | 'definitions';
+
+/** Holds a document against its JSON Schema; each fault in our own words, at the place where it stands. */
+export function schemaFaults(root: Entry, kind: DocumentKind): Diagnostic[] {
+  const validate = kind === 'sheet' ? validateSheet : validateDefinitions;
+  if (validate(plainValue(root))) return [];
+  const schema = kind === 'sheet' ? SHEET_SCHEMA : definitionsSchema();
+  return (validate.errors ?? []).flatMap((fault) => describe(fault, root, schema) ?? []);
+}
+
+/** The words of a definition are those of the sheet's schema; only which keys may stand at the top differs. */
+function definitionsSchema(): SchemaNode {
+  const own = DEFINITIONS_SCHEMA.properties ?? {};
+  const properties = Object.keys(own).map((key) => [
+    key,
+    (key === 'antinode' ? own : SHEET_SCHEMA.properties)?.[key] ?? {},
+  ]);
+  return { ...DEFINITIONS_SCHEMA, properties: Object.fromEntries(properties) as Record<string, SchemaNode> };
 }
 
 /** The data as the validator wants it. Objects have no prototype, so that no key of a sheet is one of JavaScript's own. */
@@ -50,8 +54,8 @@ interface Found {
   readonly name: string;
 }
 
-function describe(fault: ErrorObject, root: Entry): Diagnostic | null {
-  const found = follow(fault.instancePath, root);
+function describe(fault: ErrorObject, root: Entry, schema: SchemaNode): Diagnostic | null {
+  const found = follow(fault.instancePath, root, schema);
   switch (fault.keyword) {
     case 'additionalProperties':
       return unknownKey(String(fault.params['additionalProperty']), found);
@@ -71,6 +75,7 @@ function describe(fault: ErrorObject, root: Entry): Diagnostic | null {
     case 'const':
     case 'enum':
       return notAllowed(found);
+    case 'minItems':
     case 'minProperties':
       return error('SCHEMA_MISSING_KEY', found.keySpan, `\`${found.name}\` is empty`, { hints: example(found.schema) });
     default:
@@ -143,12 +148,12 @@ function valueFault({ entry, schema, keySpan }: Found, message: string): Diagnos
 }
 
 /** Walks a JSON pointer down the entries, and the schema along with them. */
-function follow(pointer: string, root: Entry): Found {
+function follow(pointer: string, root: Entry, schema: SchemaNode): Found {
   const steps = pointer
     .split('/')
     .slice(1)
     .map((step) => step.replaceAll('~1', '/').replaceAll('~0', '~'));
-  let found: Found = { entry: root, keySpan: { ...root.span, end: root.span.start }, schema: SHEET_SCHEMA, name: '' };
+  let found: Found = { entry: root, keySpan: { ...root.span, end: root.span.start }, schema, name: '' };
   for (const step of steps) found = inside(found, step) ?? found;
   return found;
 }

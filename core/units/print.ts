@@ -22,6 +22,17 @@ export function printQuantity(si: number, unit: Unit, options: PrintOptions = {}
   return printed(printNumber(number, options.digits ?? DEFAULT_DIGITS), unit);
 }
 
+/** Prints the least and the greatest of several values in one unit: `95.0 … 160.0 psig`; one number where both print alike. */
+export function printSpread(least: number, greatest: number, unit: Unit, options: PrintOptions = {}): Printed {
+  const [from, to] = [printQuantity(least, unit, options), printQuantity(greatest, unit, options)];
+  if (from.number === to.number) return to;
+  return {
+    number: `${from.number} … ${to.number}`,
+    unit: to.unit,
+    tex: `${numberTex(from.number)}\\ldots ${to.tex}`,
+  };
+}
+
 /** Prints a number just as it was typed. */
 export function printTyped(numberText: string, unit: Unit): Printed {
   return printed(numberText.replaceAll('−', '-'), unit);

@@ -1,4 +1,4 @@
-// Made from the JSON Schemas by .build/schemas.ts; do not edit. c4dca9e5f3d44438b633786a198306773ebff8154a4f4fe797739ca91c006b9e
+// Made from the JSON Schemas by .build/schemas.ts; do not edit. 11272969acc7c8c7e6df0900b1c8dbd5305a6eaee02572ef2238f4f57ea761aa
 import type { ErrorObject } from 'ajv';
 import type { Report } from '../model.ts';
 

@@ -177,7 +177,7 @@ describe('faults of other formulas', () => {
 });
 
 describe('gauge pressures in a sheet without an atmosphere', () => {
-  const scope = scopeWith([], { hasAtmosphere: false });
+  const scope = scopeWith([], { site: {} });
 
   it.each(['5 psig', 'p_d - 5 barg', 'p_d to psig'])('%s', (text) => {
     const formula = parseFormula(text, spanOf(text)).value;

@@ -14,6 +14,7 @@ export function printExpression(expression: Expression): string {
     case 'negate':
       return `(-${printExpression(expression.operand)})`;
     case 'binary':
+    case 'comparison':
       return `(${printExpression(expression.left)} ${expression.operator} ${printExpression(expression.right)})`;
     case 'call':
       return `${expression.function}(${expression.arguments.map(printExpression).join(', ')})`;

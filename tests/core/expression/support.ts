@@ -1,3 +1,4 @@
+import { onlyValue, single } from '../../../core/axes/column.ts';
 import type { Diagnosed, Diagnostic, Span } from '../../../core/diagnostics/diagnostic.ts';
 import { compile } from '../../../core/expression/compile.ts';
 import { inferComparison, inferFormula } from '../../../core/expression/infer-type.ts';
@@ -66,9 +67,12 @@ export function scopeWith(functions: readonly LibraryFunction[] = [], more: Part
   return {
     types: new Map([...values].map(([name, { type }]) => [name, type])),
     faulty: new Set(['broken']),
+    shapes: new Map(),
+    axes: new Map(),
     gases: new Set(['residue']),
+    tables: new Map(),
     functions: new Map(functions.map((fn) => [fn.name, fn])),
-    hasAtmosphere: true,
+    site: SITE,
     ...more,
   };
 }
@@ -88,16 +92,14 @@ export function evaluate(text: string, functions: readonly LibraryFunction[] = [
   const names = [...values.keys()];
   const program = compile(typed.value.typed, {
     slots: new Map(names.map((name, slot) => [name, slot])),
-    gases: new Map([['residue', RESIDUE]]),
+    gases: new Map([['residue', { axes: [], models: [RESIDUE] }]]),
     functions: new Map(functions.map((fn) => [fn.name, fn])),
     site: SITE,
   });
-  const { value, diagnostics } = run(
-    program,
-    Float64Array.from(values.values(), ({ si }) => si),
-  );
+  const columns = [...values.values()].map(({ si }) => single(si));
+  const { column, diagnostics } = run(program, columns, new Map());
   return {
-    value: value * typed.value.factor,
+    value: onlyValue(column) * typed.value.factor,
     type: typed.value.type,
     diagnostics: [...typed.diagnostics, ...diagnostics],
   };

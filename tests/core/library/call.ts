@@ -1,3 +1,4 @@
+import { onlyValue } from '../../../core/axes/column.ts';
 import { hasErrors, type Diagnostic } from '../../../core/diagnostics/diagnostic.ts';
 import { compile } from '../../../core/expression/compile.ts';
 import { inferFormula } from '../../../core/expression/infer-type.ts';
@@ -15,6 +16,8 @@ export const GASES: ReadonlyMap<string, GasModel> = new Map(
   ].map((gas) => [gas.name, gas]),
 );
 
+const SITE = { atmosphere: 101_325 };
+
 export interface CallOutcome {
   readonly value: number;
   readonly type: QuantityType | undefined;
@@ -25,13 +28,22 @@ export interface CallOutcome {
 export function callFromSheet(text: string): CallOutcome {
   const formula = parseFormula(text, { file: 'sheet.yaml', start: 0, end: text.length });
   if (formula.value === undefined) return failed(formula.diagnostics);
-  const scope = { types: new Map(), gases: new Set(GASES.keys()), functions: LIBRARY, hasAtmosphere: true };
+  const scope = {
+    types: new Map(),
+    shapes: new Map(),
+    axes: new Map(),
+    gases: new Set(GASES.keys()),
+    tables: new Map(),
+    functions: LIBRARY,
+    site: SITE,
+  };
   const typed = inferFormula(formula.value, scope);
   if (typed.value === undefined || hasErrors(typed.diagnostics)) return failed(typed.diagnostics);
   const { typed: expression, type, factor } = typed.value;
-  const program = compile(expression, { slots: new Map(), gases: GASES, functions: LIBRARY, site: { atmosphere: 101_325 } });
-  const { value, diagnostics } = run(program, new Float64Array(0));
-  return { value: value * factor, type, diagnostics: [...typed.diagnostics, ...diagnostics] };
+  const gases = new Map([...GASES].map(([name, model]) => [name, { axes: [], models: [model] }]));
+  const program = compile(expression, { slots: new Map(), gases, functions: LIBRARY, site: SITE });
+  const { column, diagnostics } = run(program, [], new Map());
+  return { value: onlyValue(column) * factor, type, diagnostics: [...typed.diagnostics, ...diagnostics] };
 }
 
 function failed(diagnostics: readonly Diagnostic[]): CallOutcome {

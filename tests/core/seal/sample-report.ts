@@ -28,6 +28,7 @@ export const SAMPLE_REPORT: Report = {
       path: 'inputs/F',
     },
   },
+  axes: [],
   checks: [
     {
       path: 'sections/1/checks/1',
@@ -57,6 +58,7 @@ export const SAMPLE_REPORT: Report = {
           status: 'pass',
           utilisation: 0.875,
           standing: 'within',
+          governing: {},
           uses: ['inputs/F'],
         },
       ],

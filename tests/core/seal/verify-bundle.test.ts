@@ -151,7 +151,7 @@ describe('the result', () => {
   it('that differs only in the last bits is accepted', async () => {
     const quantity = SAMPLE_REPORT.quantities['F'];
     if (!quantity) throw new Error('the quantity is missing');
-    const other = { ...SAMPLE_REPORT, quantities: { F: { ...quantity, si: quantity.si * (1 + 5e-10) } } };
+    const other = { ...SAMPLE_REPORT, quantities: { F: { ...quantity, si: Number(quantity.si) * (1 + 5e-10) } } };
     expect((await verifyBundle(text, () => ({ report: other, diagnostics: [] }))).valid).toBe(true);
   });
 

@@ -143,8 +143,8 @@ describe('what the schema refuses', () => {
     ],
     [
       'a key of a later version',
-      lines('conditions: []'),
-      'SCHEMA_UNKNOWN_KEY 5:1 `conditions` is not offered in this version',
+      lines('machine: []'),
+      'SCHEMA_UNKNOWN_KEY 5:1 `machine` is not offered in this version',
     ],
     ['a missing key', withInput('{ source: b }'), 'SCHEMA_MISSING_KEY 7:3 such as `value: 905 psig`'],
     ['another unit system', lines().replace('units: us', 'units: uk'), 'SCHEMA_VALUE 4:8 did you mean `us`?'],

@@ -1,0 +1,19 @@
+/** The pressure and temperature at which a volume of gas stands for an amount of it. */
+export interface ReferenceState {
+  /** Absolute, Pa. */
+  readonly pressure: number;
+  /** K. */
+  readonly temperature: number;
+}
+
+/** What a sheet states once and several units rest on: without it, those units have no meaning. */
+export interface Site {
+  /** Absolute, Pa: turns gauge readings into absolute pressures. */
+  readonly atmosphere?: number;
+  /** Behind `Nm3`. */
+  readonly normal?: ReferenceState;
+  /** Behind `Sm3` and `SCF`. */
+  readonly standard?: ReferenceState;
+}
+
+export const NO_SITE: Site = {};
