@@ -43,6 +43,18 @@ export function cellCount(shape: Shape, axes: AxisTable): number {
  * agrees with it along all axes of `from`.
  */
 export function gatherIndex(from: Shape, to: Shape, axes: AxisTable): Int32Array {
+  const known = KNOWN.get(axes) ?? new Map<string, Int32Array>();
+  KNOWN.set(axes, known);
+  const key = `${from.join()} ${to.join()}`;
+  const index = known.get(key) ?? makeGatherIndex(from, to, axes);
+  known.set(key, index);
+  return index;
+}
+
+/** The same few pairs of shapes come up in every formula of a sheet. */
+const KNOWN = new WeakMap<AxisTable, Map<string, Int32Array>>();
+
+function makeGatherIndex(from: Shape, to: Shape, axes: AxisTable): Int32Array {
   const sizes = lengths(to, axes);
   const strides = stridesIn(from, to, axes);
   const index = new Int32Array(sizes.reduce((product, size) => product * size, 1));

@@ -8,12 +8,16 @@ export function checkHeld(sheet: EvaluatedSheet): Diagnostic[] {
   const { inputs, steps, taken, columns, figures, site, atmosphere, document } = sheet;
   const shown: { readonly at: Text; readonly value: Value }[] = [
     ...[...inputs.values(), ...steps.values(), ...taken.values()].map(({ node, value }) => ({ at: node.name, value })),
-    ...columns.flatMap((column) => (column.column === 'quantity' ? [{ at: column.node.name, value: column.value }] : [])),
+    ...columns.flatMap((column) =>
+      column.column === 'quantity' ? [{ at: column.node.name, value: column.value }] : [],
+    ),
     ...[...figures.values()].flatMap(({ node, value, limit }) => [
       { at: node.of, value },
       ...(limit === null ? [] : [{ at: node.of, value: limit.value }]),
     ]),
-    ...(atmosphere === null || document.atmosphere === undefined ? [] : [{ at: document.atmosphere, value: atmosphere }]),
+    ...(atmosphere === null || document.atmosphere === undefined
+      ? []
+      : [{ at: document.atmosphere, value: atmosphere }]),
   ];
   return shown.flatMap(({ at, value: { column, unit } }) => {
     if (column.data.every((si) => Number.isFinite(fromSi(si, unit, site)))) return [];

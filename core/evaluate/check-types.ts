@@ -22,6 +22,8 @@ export interface Known {
   readonly axes: Map<AxisName, Axis>;
   readonly gases: ReadonlySet<string>;
   readonly tables: ReadonlyMap<string, LookupTable>;
+  /** Names of columns of words. */
+  readonly words: ReadonlySet<string>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
   readonly site: Site;
 }
@@ -52,7 +54,7 @@ export function checkTypes(formulas: ReadFormulas, known: Known): TypedSheet {
   const diagnostics = order.circles.map((circle) => circleFault(circle, formulas.steps));
   const types = new Map(known.inputs);
   const faulty = definedNames(known.document);
-  for (const name of types.keys()) faulty.delete(name);
+  for (const name of [...types.keys(), ...known.gases, ...known.tables.keys(), ...known.words]) faulty.delete(name);
   const shapes = new Map(known.shapes);
   const scope: TypeScope = { ...known, types, shapes, faulty };
 

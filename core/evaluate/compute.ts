@@ -2,6 +2,7 @@ import type { AxisTable } from '../axes/axis.ts';
 import { single, type Column } from '../axes/column.ts';
 import { cellCount } from '../axes/shape.ts';
 import { error, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
+import { Arena } from '../expression/arena.ts';
 import { compile, workOf, type CompileContext } from '../expression/compile.ts';
 import type { GasColumn } from '../expression/gas-column.ts';
 import { run } from '../expression/run.ts';
@@ -71,6 +72,7 @@ class Machine {
   private readonly columns: (Column | undefined)[] = [];
   private readonly context: CompileContext;
   private readonly axes: AxisTable;
+  private readonly arena = new Arena();
   private work = 0;
   private cells = 0;
 
@@ -95,7 +97,7 @@ class Machine {
     if (this.cells > LIMITS.cells)
       return this.refuse(span, `the sheet has more than ${LIMITS.cells} values over its axes`);
     if (this.work > LIMITS.work) return this.refuse(span, 'the sheet takes more computing than a sheet may');
-    const { column, diagnostics } = run(program, this.columns, this.axes);
+    const { column, diagnostics } = run(program, this.columns, this.axes, this.arena);
     this.diagnostics.push(...diagnostics);
     return column;
   }

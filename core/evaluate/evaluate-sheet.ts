@@ -99,6 +99,7 @@ function evaluateDocument(
     axes: axes.axes,
     gases: new Set([...gasNames, ...columns.gases.keys()]),
     tables: new Map(lookups.lookups.map(({ table }) => [table.name, table])),
+    words: new Set(columns.columns.flatMap(({ column, node }) => (column === 'text' ? [node.name.text] : []))),
     functions: LIBRARY,
     site: statedSite(document, site),
   });

@@ -6,7 +6,13 @@ import { article, compareTypes } from '../units/type-algebra.ts';
 import type { TypedFigure } from './check-types.ts';
 
 /** What each kind of figure runs along; a matrix takes any two axes, a line any one. */
-const ALONG: Readonly<Record<string, AxisName>> = { spectrum: 'harmonic', wave: 'angle', profile: 'place' };
+const ALONG: ReadonlyMap<string, AxisName> = new Map([
+  ['spectrum', 'harmonic'],
+  ['wave', 'angle'],
+  ['profile', 'place'],
+]);
+
+const KINDS = new Set(['line', 'spectrum', 'matrix', 'wave', 'profile']);
 
 /** Most lines that stay apart to the eye; what varies further is brought down first. */
 const MOST_AXES = 2;
@@ -14,7 +20,8 @@ const MOST_AXES = 2;
 /** Whether a figure can be drawn of what it shows, by the axes along which that varies. */
 export function figureFaults(node: FigureNode, { of, limit }: TypedFigure): Diagnostic[] {
   const axes = shapeOf(of.typed);
-  const faults = axisFaults(node, axes);
+  // Of a kind that does not exist, the schema has said so.
+  const faults = KINDS.has(node.kind.text) ? axisFaults(node, axes) : [];
   const common = limit && compareTypes(of, limit);
   if (common !== undefined && 'fault' in common) {
     const { code, message, hints } = common.fault;
@@ -30,7 +37,7 @@ function axisFaults(node: FigureNode, axes: readonly AxisName[]): Diagnostic[] {
   ];
   const varies =
     axes.length === 0 ? 'it is a single value' : `it varies along ${axes.map((name) => `\`${name}\``).join(' and ')}`;
-  const along = ALONG[kind.text];
+  const along = ALONG.get(kind.text);
   if (along !== undefined && !axes.includes(along))
     return report(`${article(kind.text)} runs along \`${along}\`, and this does not`, varies);
   if (kind.text === 'matrix' && axes.length !== 2) return report('a matrix shows a quantity over two axes', varies);

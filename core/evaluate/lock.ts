@@ -48,12 +48,15 @@ export function readLock(text: string | undefined): ReadonlyMap<string, LockedRe
   );
 }
 
+const DIGEST = /^sha256-[0-9a-f]{64}$/;
+
 function isLockFile(data: unknown): data is LockFile {
   if (!isRecord(data) || data['antinode'] !== 'lock/1' || !isRecord(data['revisions'])) return false;
   return Object.values(data['revisions']).every(
     (revision) =>
       isRecord(revision) &&
       typeof revision['digest'] === 'string' &&
+      DIGEST.test(revision['digest']) &&
       ['string', 'undefined'].includes(typeof revision['newest']) &&
       isRecord(revision['quantities']) &&
       Object.values(revision['quantities']).every(isQuantity),

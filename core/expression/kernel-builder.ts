@@ -92,6 +92,8 @@ export class KernelBuilder {
 
   private binary({ operator, left, right, span }: Expression & { node: 'binary' }): Register {
     const [a, b] = [this.value(left), this.value(right)];
+    const reciprocal = operator === '/' && b.bank === 'constant' ? exactReciprocal(this.constants[b.index]) : null;
+    if (reciprocal !== null) return this.times(a, reciprocal);
     const exponent = operator === '^' && b.bank === 'constant' ? this.constants[b.index] : undefined;
     const named = this.namedInputs(right);
     return this.push(`${key(a)}${operator}${key(b)}`, [a, b], (number, to) => ({
@@ -105,6 +107,11 @@ export class KernelBuilder {
       rightSpan: right.span,
       rightInputs: named.map(({ name, register }) => ({ name, register: number(register) })),
     }));
+  }
+
+  /** A value times a number that is fixed when the program is compiled. */
+  private times(a: Register, factor: number): Register {
+    return this.push(`${factor}x${key(a)}`, [a], (number, to) => ({ op: 'scale', to, from: number(a), factor }));
   }
 
   private call(call: Call): Register {
@@ -187,12 +194,7 @@ export class KernelBuilder {
     const given = this.value(argument);
     const factor = this.compiler.typed.factors.get(argument);
     if (factor === undefined) return given;
-    return this.push(`${factor}x${key(given)}`, [given], (number, to) => ({
-      op: 'scale',
-      to,
-      from: number(given),
-      factor,
-    }));
+    return this.times(given, factor);
   }
 
   private push(name: string, operands: readonly Register[], emit: Draft['emit']): Register {
@@ -215,6 +217,15 @@ export class KernelBuilder {
         : [],
     );
   }
+}
+
+/** 1/x where it has the very digits of the division: for powers of two. A product takes a fraction of the time. */
+function exactReciprocal(x: number | undefined): number | null {
+  if (x === undefined || x === 0) return null;
+  const reciprocal = 1 / x;
+  // The mantissa of a power of two is 1: its only digits in base two are 1 and zeros.
+  const isPowerOfTwo = /^-?10*(?:\.0*)?$|^-?0\.0*1$/.test(x.toString(2));
+  return isPowerOfTwo && Number.isFinite(reciprocal) ? reciprocal : null;
 }
 
 function key({ bank, index }: Register): string {

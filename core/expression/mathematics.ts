@@ -20,9 +20,6 @@ export interface MathFunction {
   readonly validity: string;
   readonly example: { readonly call: string; readonly result: string };
   readonly typeOf: (args: readonly Operand[]) => MathTyping;
-  /** The same on bare numbers, where the function is one of one or two: NaN, or an infinity, where it has no value. */
-  readonly unary?: (x: number) => number;
-  readonly binary?: (x: number, y: number) => number;
   /** SI values in, SI value out; as many as `parameters`, or more where they repeat. */
   readonly evaluate: (args: readonly number[]) => FunctionResult;
   /** TeX of a call, from the TeX of its arguments. */
@@ -36,7 +33,6 @@ const LIST: readonly MathFunction[] = [
     validity: 'Arguments from zero up.',
     example: { call: 'sqrt(9 m^2)', result: '3 m' },
     typeOf: ([x]) => (x === undefined ? plain() : squareRootType(x)),
-    unary: Math.sqrt,
     evaluate: ([x = NaN]) =>
       x < 0 ? outside('the square root of a negative number has no real value') : value(Math.sqrt(x)),
     tex: ([x = '']) => `\\sqrt{${x}}`,
@@ -47,21 +43,18 @@ const LIST: readonly MathFunction[] = [
     validity: 'All arguments.',
     example: { call: 'abs(-3 psi)', result: '3 psi' },
     typeOf: ([x]) => (x === undefined ? plain() : { type: x.type }),
-    unary: Math.abs,
     evaluate: ([x = NaN]) => value(Math.abs(x)),
     tex: ([x = '']) => `\\left|${x}\\right|`,
   },
   {
     ...many('min', 'Smallest of several values'),
     example: { call: 'min(3 in, 1 ft)', result: '3 in' },
-    binary: (x, y) => Math.min(x, y),
     evaluate: (args) => value(Math.min(...args)),
     tex: (args) => `\\min\\left(${args.join(',\\ ')}\\right)`,
   },
   {
     ...many('max', 'Largest of several values'),
     example: { call: 'max(3 in, 1 ft)', result: '1 ft' },
-    binary: (x, y) => Math.max(x, y),
     evaluate: (args) => value(Math.max(...args)),
     tex: (args) => `\\max\\left(${args.join(',\\ ')}\\right)`,
   },
@@ -81,7 +74,6 @@ const LIST: readonly MathFunction[] = [
     ...numeric('exp', 'Power of e'),
     validity: 'All arguments whose power is not too large to be held.',
     example: { call: 'exp(0)', result: '1' },
-    unary: exp,
     evaluate: ([x = NaN]) => value(exp(x)),
     tex: ([x = '']) => `\\exp\\left(${x}\\right)`,
   },
@@ -143,7 +135,6 @@ function angular(name: string, summary: string, fn: RealFunction, example: Examp
     validity: 'All arguments.',
     example,
     typeOf: ([x]) => numberWanted(x, { dimension: NUMBER, kind: 'plain' }),
-    unary: fn,
     evaluate: ([x = NaN]) => value(fn(x)),
     tex: ([x = '']) => `\\${name}\\left(${x}\\right)`,
   };
@@ -156,7 +147,6 @@ function inverse(name: string, summary: string, fn: RealFunction, head: string, 
     validity: name === 'atan' ? 'All arguments.' : 'Arguments from −1 to 1.',
     example,
     typeOf: ([x]) => numberWanted(x, { dimension: NUMBER, kind: 'radians' }),
-    unary: fn,
     evaluate: ([x = NaN]) => {
       const angle = fn(x);
       return Number.isNaN(angle) && !Number.isNaN(x)
@@ -172,7 +162,6 @@ function logarithm(name: string, summary: string, fn: RealFunction, head: string
     ...numeric(name, summary),
     validity: 'Arguments above zero.',
     example,
-    unary: fn,
     evaluate: ([x = NaN]) =>
       x <= 0 ? outside('a logarithm is taken of a number that is not above zero') : value(fn(x)),
     tex: ([x = '']) => `${head}\\left(${x}\\right)`,
@@ -192,7 +181,6 @@ function whole(
     example,
     typeOf: ([x]) =>
       x?.type.kind === 'percent' ? wholePercent() : numberWanted(x, { dimension: NUMBER, kind: 'plain' }),
-    unary: fn,
     evaluate: ([x = NaN]) => value(fn(x)),
     tex: ([x = '']) => open + x + close,
   };

@@ -3,16 +3,13 @@ import type { Column } from '../axes/column.ts';
 import { cellCount, gatherIndex, sameShape } from '../axes/shape.ts';
 import type { GasModel } from '../gas/gas-model.ts';
 import type { Argument } from '../library/function.ts';
-import { power } from '../numeric/math.ts';
+import { BLOCK, type Arena, type Moving } from './arena.ts';
 import * as loops from './block-loops.ts';
 import type { Findings } from './findings.ts';
-import { interpolateIn } from './lookup-table.ts';
+import { interpolateIn, type LookupTable } from './lookup-table.ts';
 import type { GasesArgument, Instruction, Kernel, LibraryInstruction, MathInstruction } from './program.ts';
 import { runCell } from './run-cell.ts';
 import { inRange } from './run-library.ts';
-
-/** Cases that are computed side by side: few enough that their columns stay near the processor. */
-export const BLOCK = 256;
 
 /**
  * Runs a kernel over all its cells, in blocks. Where a block meets a value that cannot be held, or a function has
@@ -20,13 +17,17 @@ export const BLOCK = 256;
  *
  * @param inputs one column for each input of the kernel, over some of its axes
  */
-export function runKernel(kernel: Kernel, inputs: readonly Column[], axes: AxisTable, findings: Findings): Column {
+export function runKernel(
+  kernel: Kernel,
+  inputs: readonly Column[],
+  axes: AxisTable,
+  findings: Findings,
+  arena: Arena,
+): Column {
   const cells = cellCount(kernel.axes, axes);
-  const run = new KernelRun(kernel, inputs, axes, cells, findings);
+  const run = new KernelRun(kernel, inputs, axes, cells, findings, arena);
   return cells === 1 ? run.single() : run.blocks();
 }
-
-type Mutable = { data: Float64Array; from: number };
 
 class KernelRun {
   private readonly kernel: Kernel;
@@ -34,20 +35,31 @@ class KernelRun {
   private readonly axes: AxisTable;
   private readonly cells: number;
   private readonly findings: Findings;
-  /** Where in its column each input has the value for a cell; null where cell and value have the same place. */
-  private readonly places: readonly (Int32Array | null)[];
+  private readonly arena: Arena;
+  /** Where in its column each input has the value for a cell; by a rule where one will do. */
+  private readonly places: readonly (Int32Array | 'same' | 'only')[];
   private readonly gasPlaces = new Map<readonly GasModel[], Int32Array>();
   private readonly flagged = new Uint8Array(BLOCK);
+  private anyFlagged = false;
 
-  constructor(kernel: Kernel, inputs: readonly Column[], axes: AxisTable, cells: number, findings: Findings) {
+  constructor(
+    kernel: Kernel,
+    inputs: readonly Column[],
+    axes: AxisTable,
+    cells: number,
+    findings: Findings,
+    arena: Arena,
+  ) {
     this.kernel = kernel;
     this.inputs = inputs;
     this.axes = axes;
     this.cells = cells;
     this.findings = findings;
-    this.places = inputs.map((input) =>
-      sameShape(input.axes, kernel.axes) ? null : gatherIndex(input.axes, kernel.axes, axes),
-    );
+    this.arena = arena;
+    this.places = inputs.map((input) => {
+      if (sameShape(input.axes, kernel.axes)) return 'same';
+      return input.axes.length === 0 ? 'only' : gatherIndex(input.axes, kernel.axes, axes);
+    });
   }
 
   single(): Column {
@@ -55,7 +67,7 @@ class KernelRun {
   }
 
   blocks(): Column {
-    const out = new Float64Array(this.cells);
+    const out = this.arena.column(this.cells);
     const registers = this.makeRegisters(out);
     for (let start = 0; start < this.cells; start += BLOCK) {
       const n = Math.min(BLOCK, this.cells - start);
@@ -65,35 +77,36 @@ class KernelRun {
       const result = registers[this.kernel.result];
       if (result === undefined) throw new Error('a kernel has no result');
       if (result.data !== out) out.set(result.data.subarray(result.from, result.from + n), start);
-      odd = loops.hasOdd({ data: out, from: start }, n) || odd;
+      odd = loops.hasOdd({ data: out, from: start, fixed: false }, n) || odd;
       this.explain(odd, out, start, n);
     }
     return { axes: this.kernel.axes, data: out };
   }
 
   /** Inputs that vary along all axes are read where they are; the result is written where it belongs. */
-  private makeRegisters(out: Float64Array): Mutable[] {
+  private makeRegisters(out: Float64Array): Moving[] {
     const { inputs, constants, registers, result } = this.kernel;
     const fixed = inputs.length + constants.length;
     return Array.from({ length: registers }, (_, i) => {
       const input = this.inputs[i];
-      if (input !== undefined && this.places[i] === null) return { data: input.data, from: 0 };
-      if (i === result && i >= fixed) return { data: out, from: 0 };
-      const data = new Float64Array(BLOCK);
+      if (input !== undefined && this.places[i] === 'same') return { data: input.data, from: 0, fixed: false };
+      if (i === result && i >= fixed) return { data: out, from: 0, fixed: false };
+      const data = this.arena.register(i);
       const value = i < inputs.length ? input?.data[0] : constants[i - inputs.length];
-      if (i < fixed && (input === undefined || input.axes.length === 0)) data.fill(value ?? Number.NaN);
-      return { data, from: 0 };
+      const isFixed = i < fixed && (input === undefined || input.axes.length === 0);
+      if (isFixed) data.fill(value ?? Number.NaN);
+      return { data, from: 0, fixed: isFixed };
     });
   }
 
-  private load(registers: Mutable[], start: number, n: number): void {
+  private load(registers: Moving[], start: number, n: number): void {
     const { inputs, constants, result } = this.kernel;
     this.inputs.forEach((input, i) => {
       const register = registers[i];
       const places = this.places[i];
       if (register === undefined) return;
-      if (places === null) register.from = start;
-      else if (places !== undefined && input.axes.length > 0) {
+      if (places === 'same') register.from = start;
+      else if (places !== undefined && places !== 'only') {
         for (let k = 0; k < n; k += 1) register.data[k] = input.data[places[start + k]!]!;
       }
     });
@@ -102,8 +115,8 @@ class KernelRun {
   }
 
   /** Runs one instruction on a block; true where it met a value that cannot be held. */
-  private execute(instruction: Instruction, registers: readonly Mutable[], start: number, n: number): boolean {
-    const at = (register: number): Mutable => registers[register]!;
+  private execute(instruction: Instruction, registers: readonly Moving[], start: number, n: number): boolean {
+    const at = (register: number): Moving => registers[register]!;
     const r = at(instruction.to);
     switch (instruction.op) {
       case '+':
@@ -130,7 +143,7 @@ class KernelRun {
         return loops.choose(r, instruction.operator, [at(left), at(right), at(yes), at(no)], n);
       }
       case 'interpolate':
-        return loops.unary(r, at(instruction.from), (x) => interpolateIn(instruction.table, x), n);
+        return interpolateAll(r, at(instruction.from), instruction.table, n);
       case 'mathematics':
         return this.mathematics(instruction, registers, n);
       case 'library':
@@ -141,16 +154,13 @@ class KernelRun {
 
   private mathematics(
     { function: fn, arguments: args, to }: MathInstruction,
-    registers: readonly Mutable[],
+    registers: readonly Moving[],
     n: number,
   ): boolean {
     const r = registers[to]!;
-    const [first, ...others] = args.map((register) => registers[register]!);
-    if (first === undefined) throw new Error(`${fn.name} has no argument`);
-    if (others.length === 0 && fn.unary !== undefined) return loops.unary(r, first, fn.unary, n);
-    const [second] = others;
-    if (others.length === 1 && second !== undefined && fn.binary !== undefined)
-      return loops.binary(r, first, second, fn.binary, n);
+    const operands = args.map((register) => registers[register]!);
+    const fast = loops.mathematics(fn.name, r, operands, n);
+    if (fast !== null) return fast;
     const values = args.map(() => 0);
     let odd = false;
     for (let k = 0; k < n; k += 1) {
@@ -161,7 +171,7 @@ class KernelRun {
     return odd;
   }
 
-  private library(instruction: LibraryInstruction, registers: readonly Mutable[], start: number, n: number): void {
+  private library(instruction: LibraryInstruction, registers: readonly Moving[], start: number, n: number): void {
     const r = registers[instruction.to]!;
     const args: Argument[] = instruction.arguments.map((argument) => ('fixed' in argument ? argument.fixed : 0));
     for (let k = 0; k < n; k += 1) {
@@ -176,23 +186,30 @@ class KernelRun {
       });
       const result = known && inRange(instruction, args) ? instruction.function.evaluate(args) : undefined;
       r.data[r.from + k] = result?.value ?? Number.NaN;
-      if (result === undefined || result.notices.length > 0) this.flagged[k] = 1;
+      if (result === undefined || result.notices.length > 0) {
+        this.flagged[k] = 1;
+        this.anyFlagged = true;
+      }
     }
   }
 
   /** Runs the cases of a block again that have something to say: all where a value could not be held, else the flagged. */
   private explain(odd: boolean, out: Float64Array, start: number, n: number): void {
+    if (!odd && !this.anyFlagged) return;
     for (let k = 0; k < n; k += 1) {
       if (odd || this.flagged[k] === 1) out[start + k] = this.cell(start + k);
-      this.flagged[k] = 0;
     }
+    this.flagged.fill(0);
+    this.anyFlagged = false;
   }
 
   private cell(cell: number): number {
     const { constants, registers: count, instructions, result } = this.kernel;
     const registers = new Float64Array(count);
     this.inputs.forEach((input, i) => {
-      registers[i] = input.data[this.places[i]?.[cell] ?? cell] ?? Number.NaN;
+      const places = this.places[i];
+      const place = places === undefined || places === 'same' ? cell : places === 'only' ? 0 : places[cell];
+      registers[i] = input.data[place ?? 0] ?? Number.NaN;
     });
     registers.set(constants, this.inputs.length);
     const found = this.findings.at(cell, this.kernel.axes, this.axes);
@@ -213,20 +230,25 @@ class KernelRun {
   }
 }
 
-/** Powers by products and roots where they are known, with the very digits of {@link power}. */
-function raise(r: Mutable, base: Mutable, exponents: Mutable, exponent: number | undefined, n: number): boolean {
+function interpolateAll(r: Moving, x: Moving, table: LookupTable, n: number): boolean {
+  let odd = false;
+  for (let k = 0; k < n; k += 1) {
+    const y = interpolateIn(table, x.data[x.from + k]!);
+    r.data[r.from + k] = y;
+    if (y - y !== 0) odd = true;
+  }
+  return odd;
+}
+
+/** Powers by products and roots where they are known, with the very digits of the general power. */
+function raise(r: Moving, base: Moving, exponents: Moving, exponent: number | undefined, n: number): boolean {
   switch (exponent) {
     case 2:
       loops.square(r, base, n);
       return false;
-    case 3:
-      loops.cube(r, base, n);
-      return false;
     case 0.5:
       return loops.squareRoot(r, base, n);
-    case undefined:
-      return loops.binary(r, base, exponents, power, n);
     default:
-      return loops.unary(r, base, (x) => power(x, exponent), n);
+      return loops.raise(r, base, exponents, n);
   }
 }

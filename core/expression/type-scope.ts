@@ -19,6 +19,8 @@ export interface TypeScope {
   readonly faulty?: ReadonlySet<string>;
   readonly gases: ReadonlySet<string>;
   readonly tables: ReadonlyMap<string, LookupTable>;
+  /** Columns of words, which have a name but no value. */
+  readonly words?: ReadonlySet<string>;
   readonly functions: ReadonlyMap<string, LibraryFunction>;
   /** What the sheet states of its site: gauge pressures and reference volumes rest on it. */
   readonly site: Site;

@@ -9,6 +9,7 @@ import type { TypeScope } from './type-scope.ts';
 /** A name that stands where a value is wanted, and is none. */
 export function misplacedName(name: string, span: Span, scope: TypeScope): Diagnostic {
   if (scope.gases.has(name)) return gasAsValue(name, span);
+  if (scope.words?.has(name) === true) return wordsAsValue(name, span);
   return scope.tables.has(name) ? tableAsValue(name, span) : unknownName(name, span, scope);
 }
 
@@ -40,6 +41,12 @@ export function unknownFunction(name: string, span: Span, scope: TypeScope): Dia
 function gasAsValue(name: string, span: Span): Diagnostic {
   return error('EXPRESSION_NOT_ALLOWED', span, `\`${name}\` is a gas, and has no value of its own`, {
     hints: [`a gas stands as an argument: \`molar_mass(${name})\``],
+  });
+}
+
+function wordsAsValue(name: string, span: Span): Diagnostic {
+  return error('EXPRESSION_NOT_ALLOWED', span, `\`${name}\` is a column of words, and has no value`, {
+    hints: ['give the column a unit in the place of `text` if it holds quantities'],
   });
 }
 

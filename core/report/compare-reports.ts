@@ -39,7 +39,7 @@ function compareQuantities(yours: Report, ours: Report): ReportDifference[] {
 }
 
 /** A sheet may name a quantity `constructor`; only the report's own entries count. */
-function ownQuantity({ quantities }: Report, name: string): Quantity | undefined {
+export function ownQuantity({ quantities }: Report, name: string): Quantity | undefined {
   return Object.hasOwn(quantities, name) ? quantities[name] : undefined;
 }
 
@@ -113,14 +113,14 @@ function union(a: readonly string[], b: readonly string[]): string[] {
 }
 
 /** Equal within the tolerance; arrays of numbers are compared one by one. */
-function close(a: Nested, b: Nested): boolean {
+export function close(a: Nested, b: Nested): boolean {
   if (typeof a === 'number' && typeof b === 'number')
     return a === b || Math.abs(a - b) <= RERUN_TOLERANCE * Math.max(Math.abs(a), Math.abs(b));
   if (typeof a === 'number' || typeof b === 'number') return false;
   return a.length === b.length && a.every((part, i) => close(part, b[i] ?? Number.NaN));
 }
 
-function closeOrNull(a: number | null, b: number | null): boolean {
+export function closeOrNull(a: number | null, b: number | null): boolean {
   return a === null || b === null ? a === b : close(a, b);
 }
 

@@ -13,12 +13,17 @@ import { symbolic, usedPaths } from './section-drafts.ts';
 import { valueOf } from './values.ts';
 
 /** What each kind of figure runs along; the others run along the innermost axis. */
-const ALONG: Readonly<Record<string, AxisName>> = { spectrum: 'harmonic', wave: 'angle', profile: 'place' };
+const ALONG: Readonly<Partial<Record<FigureBlock['kind'], AxisName>>> = {
+  spectrum: 'harmonic',
+  wave: 'angle',
+  profile: 'place',
+};
 
 export function figureDraft(path: string, figure: EvaluatedFigure, context: DraftContext): Draft {
   const { node, of, value, limit } = figure;
   const { axes } = value.column;
-  const along = ALONG[node.kind.text] ?? axes.at(-1) ?? 'condition';
+  const kind = node.kind.text as FigureBlock['kind'];
+  const along = ALONG[kind] ?? axes.at(-1) ?? 'condition';
   const across = axes.find((name) => name !== along);
   const limits = limit === null ? undefined : valuesAlong(limit.value, along, context);
   const formula = expressionTex(of, symbolic(context));
@@ -30,7 +35,7 @@ export function figureDraft(path: string, figure: EvaluatedFigure, context: Draf
       path,
       label: node.title?.text ?? plainText(node.of.text),
       ...(node.note === undefined ? {} : { note: node.note.text }),
-      kind: node.kind.text as FigureBlock['kind'],
+      kind,
       formula,
       unit: value.unit.text === '1' ? '' : value.unit.text,
       x: reportAxis(axisOf(along, context)),

@@ -1,4 +1,4 @@
-import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
+import { error, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import { LIMITS } from './limits.ts';
 
 // Tab, line feed and carriage return are text; the other control characters are not.
@@ -22,8 +22,40 @@ export function checkText(file: string, text: string): Diagnostic | null {
       },
     );
   }
+  const broken = text.search(LONE_SURROGATE);
+  if (broken >= 0) return brokenText({ file, start: broken, end: broken + 1 });
+  const many = beyondValues(text);
+  if (many !== null) {
+    return error('LIMIT_EXCEEDED', { file, start: many, end: many + 1 }, TOO_MANY, { hints: ['split the sheet'] });
+  }
   const deep = deepBracket(text);
   return deep === null ? null : error('YAML_TOO_DEEP', { file, start: deep, end: deep + 1 }, TOO_DEEP);
+}
+
+/** Half of a character: UTF-8 cannot write it, and no digest can be made of it. */
+const LONE_SURROGATE = /\p{Surrogate}/u;
+
+export function isBroken(text: string): boolean {
+  return LONE_SURROGATE.test(text);
+}
+
+export function brokenText(span: Span): Diagnostic {
+  return error('YAML_SYNTAX', span, 'the text holds half of a character', {
+    hints: ['characters beyond U+FFFF are written whole, or by one escape with `\\U`'],
+  });
+}
+
+export const TOO_MANY = `the sheet has more than ${LIMITS.values} values`;
+
+/** Offset at which a text has more separators than a sheet may have values; before a parser spends its time on them. */
+function beyondValues(text: string): number | null {
+  let separators = 0;
+  for (let at = 0; at < text.length; at += 1) {
+    const character = text.charCodeAt(at);
+    if (character === 0x2c || character === 0x3a) separators += 1;
+    if (separators > LIMITS.values * 2) return at;
+  }
+  return null;
 }
 
 export const TOO_DEEP = `the sheet is nested more than ${LIMITS.depth} deep`;

@@ -1,6 +1,6 @@
 import { isAlias, isMap, isScalar, isSeq, parseDocument, type Node, type ParsedNode, type Scalar } from 'yaml';
 import { error, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
-import { checkText, TOO_DEEP } from './check-text.ts';
+import { brokenText, checkText, isBroken, TOO_DEEP, TOO_MANY } from './check-text.ts';
 import type { Text } from './document.ts';
 import { LIMITS } from './limits.ts';
 import { yamlFaults } from './yaml-faults.ts';
@@ -80,7 +80,7 @@ class Reader {
   private nodeFault(node: Node | null, span: Span, depth: number): Diagnostic | null {
     this.values += 1;
     if (this.values > LIMITS.values) {
-      return error('LIMIT_EXCEEDED', span, `the sheet has more than ${LIMITS.values} values`, {
+      return error('LIMIT_EXCEEDED', span, TOO_MANY, {
         hints: ['split the sheet'],
       });
     }
@@ -129,6 +129,10 @@ class Reader {
   private scalar(node: Scalar, span: Span): Entry {
     const value = scalarValue(node);
     const text = this.scalarText(node, span, value);
+    if (isBroken(text.text)) {
+      this.diagnostics.push(brokenText(text.span));
+      return { entry: 'scalar', span: text.span, value: null, text: { text: '', span: text.span } };
+    }
     if (typeof value === 'number' && !Number.isFinite(value)) {
       this.diagnostics.push(
         error('NUMBER_NOT_FINITE', text.span, `\`${text.text}\` is no finite number`, {

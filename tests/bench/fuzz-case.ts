@@ -47,6 +47,7 @@ export function runCase(setup: Setup, index: number, seen: Set<string>): CaseRes
 /** A fault without its numbers and names, so that the same mistake in a thousand sheets counts once. */
 export function kindOf(fault: string): string {
   return fault
+    .replace(/^(throws \w+): .* at (\S+) .*$/s, '$1 in $2')
     .replace(/[`'"].*?[`'"]/g, '…')
     .replace(/quantities\.[^.]+/, 'quantities.…')
     .replace(/\d+(\.\d+)?/g, '0');

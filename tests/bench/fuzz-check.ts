@@ -40,6 +40,11 @@ function faultsOfDiagnostic(diagnostic: LocatedDiagnostic, request: EvaluateRequ
   const say = (what: string): number => faults.push(`${code}: ${what}`);
   const words = [message, ...hints, ...labels.map(({ text }) => text)];
   if (words.some((text) => text.trim() === '')) say('an empty message, hint or label');
+  const leak = words
+    .map((text) => /\bundefined\b|\[object |\[native code\]/.exec(text)?.[0])
+    .find((one) => one !== undefined);
+  if (leak !== undefined && !request.files.some(({ text }) => text.includes(leak)))
+    say(`words of the machine: ${leak}`);
   for (const place of [diagnostic, ...labels]) {
     if (!isInside(place, request)) say(`the place ${place.line}:${place.column} is not in its file`);
   }
@@ -91,7 +96,12 @@ function unfit(value: unknown, path: string): string[] {
 
 function schemaFaults(report: unknown): string[] {
   if (validateReport(report)) return [];
-  return (validateReport.errors ?? [])
-    .slice(0, 3)
+  const errors = validateReport.errors ?? [];
+  // A block that fits no kind is held against every kind; what is said of its values tells most.
+  const telling = errors.filter(({ keyword }) => TELLING.has(keyword));
+  return [...telling, ...errors]
+    .slice(0, 2)
     .map(({ instancePath, message }) => `the report breaks its schema at ${instancePath}: ${message ?? ''}`);
 }
+
+const TELLING: ReadonlySet<string> = new Set(['pattern', 'type', 'minimum', 'minLength']);

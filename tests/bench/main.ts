@@ -4,6 +4,7 @@
  */
 import { parseArgs } from 'node:util';
 import { benchEvaluate } from './evaluate.ts';
+import { benchFormulas } from './formulas.ts';
 import { fuzz } from './fuzz.ts';
 import { benchStartup } from './startup.ts';
 
@@ -25,7 +26,7 @@ const { positionals, values } = parseArgs({
 });
 const onlyFuzz = positionals[0] === 'fuzz';
 
-if (!onlyFuzz) tell([...(await benchStartup()), ...(await benchEvaluate())]);
+if (!onlyFuzz) tell([...(await benchStartup()), ...(await benchEvaluate()), ...(await benchFormulas())]);
 const failures = await fuzz({
   sheets: Number(values.sheets ?? (onlyFuzz ? 200_000 : 5_000)),
   seed: Number(values.seed),

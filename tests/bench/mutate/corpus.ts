@@ -2,6 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { dirname, join, posix, relative, sep } from 'node:path';
 import { SHEET_TEMPLATE } from '../../../cli/templates/sheet.ts';
 import type { SourceFile } from '../../../core/evaluate/request.ts';
+import { LOCK_FILE } from '../../../core/sheet/file-names.ts';
 
 /** A sheet, and the files beside it that it may use. */
 export interface Sheet {
@@ -19,7 +20,7 @@ export function readCorpus(): Sheet[] {
 
 function sheetsIn(folder: string): Sheet[] {
   const files = readdirSync(folder, { recursive: true, encoding: 'utf8' })
-    .filter((path) => /\.(yaml|csv)$/.test(path))
+    .filter((path) => /\.(yaml|csv|json)$/.test(path))
     .sort()
     .map((path) => ({ path: join(folder, path), text: readFileSync(join(folder, path), 'utf8') }));
   return files
@@ -41,6 +42,7 @@ function used(entry: string, all: readonly SourceFile[]): SourceFile[] {
   for (const name of names) {
     const text = all.find((file) => file.name === name)?.text ?? '';
     for (const other of all) if (text.includes(other.name)) names.add(other.name);
+    if (/^take:/m.test(text)) names.add(LOCK_FILE);
   }
   return all.filter(({ name }) => names.has(name));
 }

@@ -27,6 +27,7 @@ export function mutatedRequest(corpus: readonly Sheet[], seed: number, index: nu
     entry,
     files: files.map((file) => (file.name === name ? { name, text: mutated(file.text, random, others) } : file)),
     ...(random.chance(0.2) ? { units: random.pick(['us', 'si'] as const) } : {}),
+    ...(random.chance(0.05) ? { condition: random.pick(['C01', 'C03', 'C99', '', '\ud800']) } : {}),
     ...(random.chance(0.1) ? { overrides: overrides(files.map(({ text }) => text).join('\n'), random) } : {}),
   };
 }
