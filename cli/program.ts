@@ -1,7 +1,9 @@
-import { Command, CommanderError, Option } from 'commander';
+import { Command, CommanderError } from 'commander';
 import { CORE_VERSION } from '../core/version.ts';
+import { evaluatingCommands } from './evaluating-commands.ts';
 import { CommandFailure, EXIT, type ExitStatus } from './exit-status.ts';
 import { harmlessText } from './output/harmless.ts';
+import { jsonFormat } from './options.ts';
 import { paintFor, type Paint, type Surroundings } from './terminal.ts';
 
 /** What every command is given besides its own arguments. */
@@ -53,7 +55,7 @@ function explainFailure(cause: unknown, { streams, paintErr, env }: Invocation):
   return EXIT.bug;
 }
 
-type Execute = (run: Run) => Promise<void>;
+export type Execute = (run: Run) => Promise<void>;
 
 function buildProgram({ streams }: Surroundings, execute: Execute): Command {
   const program = new Command('antinode')
@@ -82,15 +84,14 @@ const EXAMPLES = `Examples:
   antinode new study compressor-study       a study folder with a sheet that runs
   antinode run sheet.yaml                   evaluate a sheet and print its report
   antinode run sheet.yaml --set p_d=915psig --units si
+  antinode explain sheet.yaml F             where one result comes from
+  antinode compare rev-a.yaml rev-b.yaml    what changed
   antinode functions speed_of_sound         what a function takes, gives, and rests on
 `;
 
 const STATUSES = `
 Exit status: 0 done and every check passes, 1 some check fails, 2 the sheet is wrong, 3 wrong usage,
 4 the server refused or is out of reach.`;
-
-const jsonFormat = (): Option =>
-  new Option('--format <format>', 'form of the answer').choices(['text', 'json']).default('text');
 
 function sheetCommands(program: Command, execute: Execute): void {
   const create = program
@@ -124,22 +125,7 @@ function sheetCommands(program: Command, execute: Execute): void {
       execute(async (at) => (await import('./commands/lint.ts')).lint(files, options, at)),
     );
 
-  program
-    .command('run')
-    .argument('<file>', 'sheet to evaluate; - reads standard input')
-    .description('evaluate a sheet')
-    .option('--set <name=value>', 'another value for an input; may be given again', collect, [])
-    .addOption(new Option('--units <system>', 'show all results in this system').choices(['us', 'si']))
-    .addOption(new Option('--format <format>', 'form of the report').choices(['text', 'json', 'html']).default('text'))
-    .option('--out <file>', 'write the report to a file')
-    .option('--strict', 'warnings make the exit status 2')
-    .addHelpText(
-      'before',
-      'Examples:\n  antinode run sheet.yaml\n  antinode run sheet.yaml --format html --out report.html\n  antinode run sheet.yaml --set p_d=915psig --units si\n',
-    )
-    .action((file: string, options: RunOptions) =>
-      execute(async (at) => (await import('./commands/run.ts')).run(file, options, at)),
-    );
+  evaluatingCommands(program, execute);
 
   program
     .command('verify')
@@ -152,18 +138,6 @@ function sheetCommands(program: Command, execute: Execute): void {
     .action((bundle: string, options: { key?: string; format: 'text' | 'json' }) =>
       execute(async (at) => (await import('./commands/verify.ts')).verify(bundle, options, at)),
     );
-}
-
-export interface RunOptions {
-  readonly set: readonly string[];
-  readonly units?: 'us' | 'si';
-  readonly format: 'text' | 'json' | 'html';
-  readonly out?: string;
-  readonly strict?: true;
-}
-
-function collect(value: string, previous: readonly string[]): string[] {
-  return [...previous, value];
 }
 
 function catalogueCommands(program: Command, execute: Execute): void {

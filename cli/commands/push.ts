@@ -1,9 +1,9 @@
-import { basename } from 'node:path';
+import { basename, dirname } from 'node:path';
 import { evaluateSheet } from '../../core/evaluate/evaluate-sheet.ts';
 import type { Report } from '../../core/report/model.ts';
 import type { Problem, Push, RevisionSummary, StudySummary } from '../../schemas/api.ts';
 import { CommandFailure, EXIT, type ExitStatus } from '../exit-status.ts';
-import { readSource } from '../files/read-source.ts';
+import { readSheetFilesIn } from '../files/read-sheet-files.ts';
 import { count, diagnosticsText } from '../output/print-diagnostics.ts';
 import type { Invocation } from '../program.ts';
 import { callApi, refusalFailure, requireApi } from '../remote/api.ts';
@@ -15,19 +15,18 @@ export async function push(
   options: { readonly study?: string; readonly format: 'text' | 'json' },
   at: Invocation,
 ): Promise<ExitStatus> {
-  const source = await readSource(file, at);
-  if ('fault' in source) {
-    at.streams.err(diagnosticsText([source.fault], at.paintErr));
+  const read = await readSheetFilesIn(dirname(file), basename(file), at);
+  if ('fault' in read) {
+    at.streams.err(diagnosticsText([read.fault], at.paintErr));
     return EXIT.sheetWrong;
   }
-  const name = basename(source.name);
-  const files = [{ name, text: source.text }];
-  const { report, diagnostics } = evaluateSheet({ entry: name, files });
+  const { entry, files } = read;
+  const { report, diagnostics } = evaluateSheet({ entry, files });
   if (diagnostics.length > 0) at.streams.err(diagnosticsText(diagnostics, at.paintErr));
   if (report === null) return EXIT.sheetWrong;
   const credentials = await requireCredentials(at);
   const study = options.study ?? (await onlyStudy(credentials));
-  const revision = await send({ entry: name, files, report }, study, credentials, at);
+  const revision = await send({ entry, files: [...files], report }, study, credentials, at);
   at.streams.out(
     options.format === 'json'
       ? `${JSON.stringify({ antinode: 'push/1', revision }, null, 2)}\n`

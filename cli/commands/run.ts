@@ -1,20 +1,19 @@
 import { writeFile } from 'node:fs/promises';
 import { resolve } from 'node:path';
-import { evaluateSheet } from '../../core/evaluate/evaluate-sheet.ts';
-import type { Evaluation, Override } from '../../core/evaluate/request.ts';
+import type { Evaluation } from '../../core/evaluate/request.ts';
 import type { Report } from '../../core/report/model.ts';
 import { CORE_VERSION } from '../../core/version.ts';
+import type { RunOptions } from '../evaluating-commands.ts';
 import { CommandFailure, EXIT, type ExitStatus } from '../exit-status.ts';
-import { readSource } from '../files/read-source.ts';
+import { evaluateFile } from '../files/evaluate-file.ts';
 import { diagnosticsText } from '../output/print-diagnostics.ts';
 import { reportText } from '../output/report-text.ts';
-import type { Invocation, RunOptions } from '../program.ts';
+import type { Invocation } from '../program.ts';
 import { diagnosticsStatus } from './lint.ts';
 
 /** Evaluates a sheet and writes its report; the checks decide the exit status. */
 export async function run(file: string, options: RunOptions, at: Invocation): Promise<ExitStatus> {
-  const overrides = options.set.map(readOverride);
-  const evaluation = await evaluateFile(file, overrides, options.units, at);
+  const evaluation = await evaluateFile(file, options, at);
   const { report, diagnostics } = evaluation;
   if (diagnostics.length > 0) at.streams.err(diagnosticsText(diagnostics, at.paintErr));
   if (report === null) {
@@ -27,29 +26,12 @@ export async function run(file: string, options: RunOptions, at: Invocation): Pr
   return report.summary.failed > 0 ? EXIT.checkFails : EXIT.done;
 }
 
-async function evaluateFile(
-  file: string,
-  overrides: readonly Override[],
-  units: 'us' | 'si' | undefined,
-  at: Invocation,
-): Promise<Evaluation> {
-  const source = await readSource(file, at);
-  if ('fault' in source) return { report: null, diagnostics: [source.fault] };
-  return evaluateSheet({ entry: source.name, files: [source], overrides, ...(units === undefined ? {} : { units }) });
-}
-
-function readOverride(text: string): Override {
-  const [name, value] = [text.slice(0, text.indexOf('=')).trim(), text.slice(text.indexOf('=') + 1).trim()];
-  if (text.includes('=') && name !== '' && value !== '') return { name, value };
-  throw new CommandFailure(EXIT.usage, `\`--set ${text}\` does not name an input and its value`, [
-    'write `--set p_d=915psig`, or `--set "p_d=915 psig"`',
-  ]);
-}
-
 async function rendered(report: Report, { format, out }: RunOptions, at: Invocation): Promise<string> {
   switch (format) {
     case 'json':
       return jsonText(report);
+    case 'csv':
+      return (await import('../output/report-csv.ts')).reportCsv(report);
     case 'html':
       return (await import('../output/report-html.ts')).reportHtml(report);
     case 'text':

@@ -1,6 +1,6 @@
 import { renderDiagnostic } from '../../core/diagnostics/render.ts';
 import type { LocatedDiagnostic } from '../../core/report/model.ts';
-import type { Paint } from '../terminal.ts';
+import type { Paint, Streams } from '../terminal.ts';
 
 /** All diagnostics in the human form, and one line that counts them; empty when there are none. */
 export function diagnosticsText(diagnostics: readonly LocatedDiagnostic[], paint: Paint): string {
@@ -13,6 +13,16 @@ export function diagnosticsText(diagnostics: readonly LocatedDiagnostic[], paint
   };
   const rendered = diagnostics.map((diagnostic) => renderDiagnostic(diagnostic, painter));
   return `${[...rendered, countLine(diagnostics)].join('\n\n')}\n`;
+}
+
+/** The answer of a command whose sheet is wrong: diagnostics for people on `err`, or for programs on `out`. */
+export function writeFaults(
+  diagnostics: readonly LocatedDiagnostic[],
+  format: 'text' | 'json',
+  { streams, paintErr }: { readonly streams: Streams; readonly paintErr: Paint },
+): void {
+  if (format === 'json') streams.out(`${JSON.stringify({ antinode: 'diagnostics/1', diagnostics }, null, 2)}\n`);
+  streams.err(diagnosticsText(diagnostics, paintErr));
 }
 
 export function countLine(diagnostics: readonly LocatedDiagnostic[]): string {

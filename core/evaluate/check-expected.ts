@@ -1,4 +1,4 @@
-import { extremes, type Column } from '../axes/column.ts';
+import { exceeds, extremes, type Column } from '../axes/column.ts';
 import { cellText } from '../axes/points.ts';
 import type { AxisTable } from '../axes/axis.ts';
 import { error, warning, type Diagnostic } from '../diagnostics/diagnostic.ts';
@@ -76,7 +76,7 @@ export function checkExpected(
     if (column === undefined) continue;
     const ends = extremes(column);
     const [low, high] = [column.data[ends.least] ?? Number.NaN, column.data[ends.greatest] ?? Number.NaN];
-    const outside = low < least ? ends.least : high > greatest ? ends.greatest : null;
+    const outside = exceeds(least, low) ? ends.least : exceeds(high, greatest) ? ends.greatest : null;
     within.set(name, outside === null);
     if (outside === null) continue;
     const where = cellText(outside, column.axes, axes);

@@ -37,9 +37,13 @@ export interface FigureColumns {
   readonly limit?: Column;
 }
 
-/** Evaluates all typed steps in their order, then holds every check against its limit. */
-export function compute(sheet: TypedSheet, givens: Givens): Computed {
-  const machine = new Machine(sheet, givens);
+/**
+ * Evaluates all typed steps in their order, then holds every check against its limit.
+ *
+ * @param arena memory for the results; whoever computes again and again gives it again
+ */
+export function compute(sheet: TypedSheet, givens: Givens, arena = new Arena()): Computed {
+  const machine = new Machine(sheet, givens, arena);
   const steps = new Map<string, Column>();
   for (const [name, { typed, factor }] of sheet.steps) {
     const column = scaled(machine.evaluate(typed), factor);
@@ -72,11 +76,12 @@ class Machine {
   private readonly columns: (Column | undefined)[] = [];
   private readonly context: CompileContext;
   private readonly axes: AxisTable;
-  private readonly arena = new Arena();
+  private readonly arena: Arena;
   private work = 0;
   private cells = 0;
 
-  constructor(sheet: TypedSheet, { inputs, gases, functions, site, axes }: Givens) {
+  constructor(sheet: TypedSheet, { inputs, gases, functions, site, axes }: Givens, arena: Arena) {
+    this.arena = arena;
     this.slots = new Map([...inputs.keys(), ...sheet.steps.keys()].map((name, slot) => [name, slot]));
     this.axes = axes;
     this.context = { slots: this.slots, gases, functions, site };

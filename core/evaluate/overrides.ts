@@ -2,10 +2,7 @@ import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import { nearest } from '../diagnostics/nearest.ts';
 import type { ConditionColumnNode, InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { LIMITS } from '../sheet/limits.ts';
-import type { Override } from './request.ts';
-
-/** Stands as the file's name in the place of a diagnostic about a value set from outside the sheet. */
-export const overrideFile = (name: string): string => `--set ${name}`;
+import { overrideFile, type Override } from './request.ts';
 
 /** What stands for each input: its own text, or the one that is set from outside in its place. */
 export class Overrides {

@@ -22,6 +22,16 @@ export interface EvaluateRequest {
   readonly units?: 'us' | 'si';
 }
 
+/** The texts of a request by the name of their file; a value set from outside stands for a file of its own. */
+export function requestTexts({ files, overrides = [] }: EvaluateRequest): ReadonlyMap<string, string> {
+  const texts = new Map(files.map(({ name, text }) => [name, text]));
+  for (const { name, value } of overrides) texts.set(overrideFile(name), value);
+  return texts;
+}
+
+/** Stands as the file's name in the place of a diagnostic about a value set from outside the sheet. */
+export const overrideFile = (name: string): string => `--set ${name}`;
+
 export interface Evaluation {
   /** Null when the sheet has an error. */
   readonly report: Report | null;

@@ -123,6 +123,8 @@ function interpolate(call: Call, inference: Inference): TypedCall | undefined {
   if (named === undefined || x === undefined) return undefined;
   const table = named.node === 'name' ? inference.scope.tables.get(named.name) : undefined;
   if (table === undefined) {
+    // What is wrong with a table is said where it stands.
+    if (named.node === 'name' && inference.scope.faulty?.has(named.name) === true) return undefined;
     if (named.node === 'name') inference.diagnostics.push(unknownTable(named.name, named.span, inference.scope));
     else
       inference.report('FUNCTION_ARGUMENTS', named.span, '`interpolate` wants the name of a table first', [

@@ -113,7 +113,9 @@ function quantity(
   { axes, site }: EvaluatedSheet,
 ): Quantity {
   return {
-    value: (column.axes.length === 0 ? typed : undefined) ?? nested(column, axes, (si) => fromSi(si, unit, site)),
+    value:
+      (column.axes.length === 0 ? typed : undefined) ??
+      nested(column, axes, (si) => withoutNoise(fromSi(si, unit, site))),
     unit: unit.text,
     si: nested(column, axes, (si) => si),
     dimension: describeType(type),
@@ -126,6 +128,11 @@ function quantity(
     printed: block.printed,
     path: block.path,
   };
+}
+
+/** A conversion there and back leaves `1000.0000000000001` of 1000; no digit that means something is lost. */
+function withoutNoise(value: number): number {
+  return Number(value.toPrecision(15));
 }
 
 function checkResult({ path, that, label, status, utilisation, governing }: CheckBlock): CheckResult {

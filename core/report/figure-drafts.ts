@@ -36,6 +36,7 @@ export function figureDraft(path: string, figure: EvaluatedFigure, context: Draf
       label: node.title?.text ?? plainText(node.of.text),
       ...(node.note === undefined ? {} : { note: node.note.text }),
       kind,
+      of: plainText(node.of.text),
       formula,
       unit: value.unit.text === '1' ? '' : value.unit.text,
       x: reportAxis(axisOf(along, context)),
@@ -43,7 +44,13 @@ export function figureDraft(path: string, figure: EvaluatedFigure, context: Draf
       ...(across === undefined ? {} : { seriesAxis: across }),
       ...(limits === undefined || limit === null
         ? {}
-        : { limit: { formula: expressionTex(limit.expression, symbolic(context)), values: limits } }),
+        : {
+            limit: {
+              of: plainText(node.limit?.text ?? ''),
+              formula: expressionTex(limit.expression, symbolic(context)),
+              values: limits,
+            },
+          }),
       greatest: {
         printed: printCell(value, greatest, undefined, context),
         at: cellText(greatest, axes, context.sheet.axes),

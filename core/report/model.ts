@@ -173,6 +173,8 @@ export interface TableBlock extends BlockBase {
 export interface FigureBlock extends BlockBase {
   readonly block: 'figure';
   readonly kind: 'line' | 'spectrum' | 'matrix' | 'wave' | 'profile';
+  /** What is shown, as typed. */
+  readonly of: string;
   /** TeX of what is shown. */
   readonly formula: string;
   readonly unit: string;
@@ -181,7 +183,7 @@ export interface FigureBlock extends BlockBase {
   readonly series: readonly { readonly label: string; readonly values: readonly number[] }[];
   readonly seriesAxis?: string;
   /** What it is held against: one value, or one for each point of `x`. */
-  readonly limit?: { readonly formula: string; readonly values: readonly number[] };
+  readonly limit?: { readonly of: string; readonly formula: string; readonly values: readonly number[] };
   readonly greatest: Extreme;
   readonly uses: readonly string[];
 }

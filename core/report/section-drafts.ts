@@ -1,4 +1,4 @@
-import { extremes } from '../axes/column.ts';
+import { exceeds, extremes } from '../axes/column.ts';
 import { cellPoint, cellText } from '../axes/points.ts';
 import { functionsIn, namesIn } from '../expression/names.ts';
 import { comparisonTex, expressionTex, type TexOptions } from '../expression/tex.ts';
@@ -115,7 +115,7 @@ const CLOSE = 0.9;
 
 function standing({ passes, utilisation }: EvaluatedCheck): CheckBlock['standing'] {
   if (!passes) return 'over';
-  return utilisation !== null && utilisation >= CLOSE ? 'close' : 'within';
+  return utilisation !== null && !exceeds(CLOSE, utilisation) ? 'close' : 'within';
 }
 
 /** Paths of the blocks whose values or gases an expression reads, in order of appearance. */

@@ -1,4 +1,4 @@
-// Made from the JSON Schemas by .build/schemas.ts; do not edit. 11272969acc7c8c7e6df0900b1c8dbd5305a6eaee02572ef2238f4f57ea761aa
+// Made from the JSON Schemas by .build/schemas.ts; do not edit. 1379b0002313b57c3dfc9fb177abab518600e3026edbbe0b451d98e3a9093662
 import type { ErrorObject } from 'ajv';
 import type { Report } from '../model.ts';
 
