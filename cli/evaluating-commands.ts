@@ -7,6 +7,8 @@ export interface RunOptions extends EvaluateOptions {
   readonly format: 'text' | 'json' | 'html' | 'csv';
   readonly out?: string;
   readonly strict?: true;
+  readonly sensitivity?: true;
+  readonly watch?: true;
 }
 
 export interface ExplainOptions extends EvaluateOptions {
@@ -26,10 +28,12 @@ export function evaluatingCommands(program: Command, execute: Execute): void {
       new Option('--format <format>', 'form of the report').choices(['text', 'json', 'html', 'csv']).default('text'),
     )
     .option('--out <file>', 'write the report to a file')
+    .option('--sensitivity', 'rank the uncertain inputs by their effect on each check')
+    .option('--watch', 'evaluate again whenever a file of the sheet is saved')
     .option('--strict', 'warnings make the exit status 2')
     .addHelpText(
       'before',
-      'Examples:\n  antinode run sheet.yaml\n  antinode run sheet.yaml --format html --out report.html\n  antinode run sheet.yaml --set p_d=915psig --units si\n  antinode run sheet.yaml --condition C07 --format csv\n',
+      'Examples:\n  antinode run sheet.yaml\n  antinode run sheet.yaml --format html --out report.html\n  antinode run sheet.yaml --set p_d=915psig --units si\n  antinode run sheet.yaml --condition C07 --format csv\n  antinode run sheet.yaml --sensitivity\n  antinode run sheet.yaml --watch\n',
     )
     .action((file: string, options: RunOptions) =>
       execute(async (at) => (await import('./commands/run.ts')).run(file, options, at)),

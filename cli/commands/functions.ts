@@ -1,6 +1,8 @@
 import { nearest } from '../../core/diagnostics/nearest.ts';
 import { CONSTANTS } from '../../core/expression/constants.ts';
-import { MATHEMATICS } from '../../core/expression/mathematics.ts';
+import { AXIS_FUNCTIONS, type AxisFunction } from '../../core/expression/axis-functions.ts';
+import { BUILT_IN_NAMES } from '../../core/expression/built-in.ts';
+import { MATHEMATICS, type MathFunction } from '../../core/expression/mathematics.ts';
 import { LIBRARY } from '../../core/library/catalogue.ts';
 import type { LibraryFunction, Parameter } from '../../core/library/function.ts';
 import { CommandFailure, EXIT, type ExitStatus } from '../exit-status.ts';
@@ -29,17 +31,22 @@ function catalogue(format: 'text' | 'json'): string {
         .map((fn) => `  ${head(fn).padEnd(width)}  ${fn.summary}`),
     ].join('\n'),
   );
+  const axes = [...AXIS_FUNCTIONS.values()].map((fn) => `  ${builtInHead(fn).padEnd(width)}  ${fn.summary}`);
   const mathematics = `mathematics\n  ${[...MATHEMATICS.keys()].join(' ')}\n  constants: ${[...CONSTANTS.keys()].join(' ')}`;
-  return `${[...listed, mathematics].join('\n\n')}\n\n\`antinode functions NAME\` tells all about one.\n`;
+  const parts = [...listed, ['axes', ...axes].join('\n'), mathematics];
+  return `${parts.join('\n\n')}\n\n\`antinode functions NAME\` tells all about one, \`antinode functions TOPIC\` lists one topic.\n`;
 }
 
 function one(name: string, format: 'text' | 'json', at: Invocation): string {
   const fn = LIBRARY.get(name);
   if (fn !== undefined) return format === 'json' ? json([asData(fn)]) : described(fn, at);
-  const mathematics = MATHEMATICS.get(name);
-  if (mathematics !== undefined)
-    return format === 'json' ? json([{ name, summary: mathematics.summary }]) : `${name}: ${mathematics.summary}\n`;
-  const near = nearest(name, [...LIBRARY.keys(), ...MATHEMATICS.keys()], 3);
+  const builtIn = MATHEMATICS.get(name) ?? AXIS_FUNCTIONS.get(name);
+  if (builtIn !== undefined) return format === 'json' ? json([builtInData(builtIn)]) : describedBuiltIn(builtIn, at);
+  if (name === 'axes') return format === 'json' ? json([...AXIS_FUNCTIONS.values()].map(builtInData)) : axesText(at);
+  const topic = [...LIBRARY.values()].filter((each) => each.topic === name);
+  if (topic.length > 0)
+    return format === 'json' ? json(topic.map(asData)) : `${topic.map((each) => described(each, at)).join('\n')}`;
+  const near = nearest(name, [...LIBRARY.keys(), ...BUILT_IN_NAMES], 3);
   throw new CommandFailure(EXIT.usage, `there is no function \`${name}\``, [
     near.length > 0 ? `did you mean \`${near.join('`, `')}\`?` : '`antinode functions` lists all',
   ]);
@@ -61,6 +68,35 @@ function described(fn: LibraryFunction, { paintOut }: Invocation): string {
     `  source    ${fn.source}`,
     `  example   ${fn.example.call} = ${fn.example.result}`,
   ].join('\n')}\n`;
+}
+
+function axesText(at: Invocation): string {
+  return [...AXIS_FUNCTIONS.values()].map((fn) => describedBuiltIn(fn, at)).join('\n');
+}
+
+type BuiltIn = MathFunction | AxisFunction;
+
+function builtInHead({ name, parameters }: BuiltIn): string {
+  return `${name}(${parameters.map((parameter) => parameter.name).join(', ')})`;
+}
+
+function describedBuiltIn(fn: BuiltIn, { paintOut }: Invocation): string {
+  const width = Math.max(...fn.parameters.map(({ name }) => name.length));
+  return `${[
+    paintOut('bold', builtInHead(fn)),
+    `  ${fn.summary}`,
+    '',
+    ...fn.parameters.map(
+      ({ name, summary }, i) => `  ${i === 0 ? 'takes   ' : '        '}  ${name.padEnd(width)}  ${summary}`,
+    ),
+    `  gives     ${fn.returns}`,
+    `  valid     ${fn.validity}`,
+    `  example   ${fn.example.call} = ${fn.example.result}`,
+  ].join('\n')}\n`;
+}
+
+function builtInData({ name, topic, summary, parameters, returns, validity, example }: BuiltIn): unknown {
+  return { name, topic, summary, parameters, returns, validity, example };
 }
 
 function head(fn: LibraryFunction): string {

@@ -1,8 +1,9 @@
 import { evaluateSheet } from '../../core/evaluate/evaluate-sheet.ts';
-import type { Evaluation, Override } from '../../core/evaluate/request.ts';
+import type { EvaluateRequest, Evaluation, Override } from '../../core/evaluate/request.ts';
+import type { LocatedDiagnostic } from '../../core/report/model.ts';
 import { CommandFailure, EXIT } from '../exit-status.ts';
 import type { Surroundings } from '../terminal.ts';
-import { readSource } from './read-source.ts';
+import { readSheetFiles } from './read-sheet-files.ts';
 
 /** How a command wants its sheet evaluated; the options carry these names on the command line too. */
 export interface EvaluateOptions {
@@ -16,19 +17,29 @@ export interface EvaluateOptions {
 /** Reads and evaluates a sheet. What is wrong with the file comes back as a diagnostic, like what is wrong in it. */
 export async function evaluateFile(
   file: string,
-  { set = [], units, condition }: EvaluateOptions,
+  options: EvaluateOptions,
   surroundings: Surroundings,
 ): Promise<Evaluation> {
+  const read = await readRequest(file, options, surroundings);
+  return 'fault' in read ? { report: null, diagnostics: [read.fault] } : evaluateSheet(read.request);
+}
+
+/** What is to be evaluated: the sheet with all files that it uses, and the options. */
+export async function readRequest(
+  file: string,
+  { set = [], units, condition }: EvaluateOptions,
+  surroundings: Surroundings,
+): Promise<{ readonly request: EvaluateRequest } | { readonly fault: LocatedDiagnostic }> {
   const overrides = set.map(readOverride);
-  const source = await readSource(file, surroundings);
-  if ('fault' in source) return { report: null, diagnostics: [source.fault] };
-  return evaluateSheet({
-    entry: source.name,
-    files: [source],
+  const sheet = await readSheetFiles(file, surroundings);
+  if ('fault' in sheet) return { fault: sheet.fault };
+  const request = {
+    ...sheet,
     overrides,
     ...(units === undefined ? {} : { units }),
     ...(condition === undefined ? {} : { condition }),
-  });
+  };
+  return { request };
 }
 
 function readOverride(text: string): Override {
