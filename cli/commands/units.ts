@@ -12,7 +12,13 @@ import { diagnosticsText } from '../output/print-diagnostics.ts';
 import type { Invocation } from '../program.ts';
 
 /** Without a sheet, gauge readings are read against the standard atmosphere, and the answer says so. */
-const SITE: Site = { atmosphere: 101_325 };
+const SITE: Site = {
+  atmosphere: 101_325,
+  normal: { pressure: 101_325, temperature: 273.15 },
+  standard: { pressure: 101_325, temperature: 288.15 },
+};
+
+const STATES = { normal: '101.325 kPa and 0 °C', standard: '101.325 kPa and 15 °C' } as const;
 
 /** The table of units, or what one value is in the other units of its kind. */
 export function units(
@@ -95,12 +101,19 @@ function conversionText(
   const gauge = shown.some(({ unit: text }) => parseUnit(text)?.gauge === true)
     ? ['  gauge readings at the standard atmosphere, 101.325 kPa; a sheet states its own']
     : [];
+  const reference = [unit, ...shown.map(({ unit: text }) => parseUnit(text))].flatMap(
+    (each) => each?.reference?.state ?? [],
+  );
+  const states = [...new Set(reference)].map(
+    (state) => `  ${state} volumes at ${STATES[state]}; a sheet states its own`,
+  );
   const rows = shown.map(({ unit: text, value }) => `  ${printNumber(value, 7).padStart(14)} ${text}`);
-  return `${[head, ...rows, ...gauge].join('\n')}\n`;
+  return `${[head, ...rows, ...gauge, ...states].join('\n')}\n`;
 }
 
-function asData({ text, factor, shift, gauge, kind, dimension }: Unit): Record<string, unknown> {
-  return { unit: text, dimension: describeType({ dimension, kind }), factor, shift, gauge };
+function asData({ text, factor, shift, gauge, kind, dimension, reference }: Unit): Record<string, unknown> {
+  const rests = reference === undefined ? {} : { reference: reference.state };
+  return { unit: text, dimension: describeType({ dimension, kind }), factor, shift, gauge, ...rests };
 }
 
 function conversionData({ number, unit }: ParsedQuantity, conversions: readonly Conversion[]): unknown {

@@ -32,6 +32,8 @@ export const DIAGNOSTIC_CODES = {
   DIFFERENCE_WANTED: 'A difference is wanted, and a level is given.',
   LEVEL_AMBIGUOUS: 'K or degR could be a level or a difference here.',
   CYCLES_AND_RADIANS: 'A rate in cycles meets one in radians, or one that does not say which it is.',
+  AMPLITUDES_DIFFER: 'A peak, a peak-to-peak or an rms value meets one of another kind.',
+  REFERENCE_MISSING: 'A normal or standard volume is used, and the sheet states no reference state for it.',
   ATMOSPHERE_MISSING: 'A gauge pressure is used, and the sheet states no atmosphere.',
   QUANTITY_SYNTAX: 'A value is not a number with a unit.',
   EXPRESSION_SYNTAX: 'A formula cannot be read.',

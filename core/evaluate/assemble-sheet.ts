@@ -11,9 +11,10 @@ import type {
   Value,
 } from '../report/evaluated-sheet.ts';
 import type { CheckNode, FigureNode, SheetDocument } from '../sheet/document.ts';
-import { displayUnit, inSystem } from '../units/display.ts';
+import { displayUnitFor, inSystem } from '../units/display.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import type { Site } from '../units/site.ts';
+import { unitOfAmplitude } from '../units/parse-unit.ts';
 import type { Unit } from '../units/unit.ts';
 import type { TypedSheet } from './check-types.ts';
 import type { Computed } from './compute.ts';
@@ -103,12 +104,18 @@ function assembleChecks({ typed, computed }: Parts): Map<CheckNode, EvaluatedChe
   return checks;
 }
 
+function magnitudeOf({ data }: Value['column']): number {
+  return data.reduce((largest, value) => Math.max(largest, Math.abs(value)), 0);
+}
+
 function shown(
   type: QuantityType,
   column: Value['column'],
   wanted: Unit | undefined,
   { units, shownIn }: Parts,
 ): Value {
-  const unit = wanted ?? displayUnit(type, units);
+  const bare = wanted ?? displayUnitFor(type, units, magnitudeOf(column));
+  // A unit that names no amplitude must not hide one.
+  const unit = type.amplitude === undefined ? bare : unitOfAmplitude(bare, type.amplitude);
   return { type, column, unit: shownIn === undefined ? unit : inSystem(unit, shownIn) };
 }

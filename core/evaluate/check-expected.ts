@@ -8,7 +8,7 @@ import type { QuantityType } from '../units/dimension.ts';
 import { describeType, sameDimension } from '../units/dimensions.ts';
 import { parseRange } from '../units/parse-range.ts';
 import { printNumber } from '../units/print.ts';
-import type { Site } from '../units/site.ts';
+import { missingFromSite, type Site } from '../units/site.ts';
 import { article } from '../units/type-algebra.ts';
 import type { Unit } from '../units/unit.ts';
 import { isSameKind } from './read-values.ts';
@@ -49,7 +49,7 @@ export function readExpected(
           hints: ['give the range in a unit of the value'],
         }),
       );
-    } else if (!unit.gauge || site.atmosphere !== undefined) {
+    } else if (missingFromSite(unit, site) === null) {
       expected.push({
         name: name.text,
         text: expect,

@@ -9,6 +9,7 @@ import { describeType, FREQUENCY, isNumber, LENGTH, sameDimension } from '../uni
 import { parseQuantity } from '../units/parse-quantity.ts';
 import { isRange, parseRange, rangePoints } from '../units/parse-range.ts';
 import { NO_SITE } from '../units/site.ts';
+import { typeOfUnit } from '../units/unit.ts';
 
 export interface Axes {
   readonly axes: Map<AxisName, Axis>;
@@ -54,7 +55,7 @@ function rangeAxis({ text, span }: Text): Diagnosed<Axis> {
   const { value: range, diagnostics } = parseRange(text, span);
   if (range === undefined) return { diagnostics };
   const { unit } = range;
-  const type: QuantityType = { dimension: unit.dimension, kind: unit.kind };
+  const type = typeOfUnit(unit);
   const name = axisFor(type);
   if (name === null) {
     return fail(span, `a range of ${describeType(type)} runs along no axis`, [
@@ -80,7 +81,7 @@ function pointAxis({ text, span }: Text): Diagnosed<Axis> {
   const { value, diagnostics } = parseQuantity(text, span);
   if (value === undefined) return { diagnostics };
   const { unit, number } = value;
-  const type: QuantityType = { dimension: unit.dimension, kind: unit.kind };
+  const type = typeOfUnit(unit);
   const name = axisFor(type);
   if (name === null)
     return fail(span, `${describeType(type)} runs along no axis`, ['set a value like those of the range'], 'OVERRIDE');

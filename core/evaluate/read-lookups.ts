@@ -5,6 +5,7 @@ import type { EvaluatedLookup } from '../report/evaluated-sheet.ts';
 import type { LookupNode, SheetDocument, Text } from '../sheet/document.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 import type { Site } from '../units/site.ts';
+import { typeOfUnit } from '../units/unit.ts';
 import { unknownUnit } from '../units/unknown-unit.ts';
 import { isSameKind, readValue } from './read-values.ts';
 
@@ -64,5 +65,5 @@ function readColumn(
     }
     return onlyValue(read.value.column);
   });
-  return { type: { dimension: unit.dimension, kind: unit.kind }, values: Float64Array.from(values), unit };
+  return { type: typeOfUnit(unit), values: Float64Array.from(values), unit };
 }

@@ -9,6 +9,7 @@ import { toSi } from '../units/convert.ts';
 import { inSystem } from '../units/display.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 import { NO_SITE } from '../units/site.ts';
+import { typeOfUnit } from '../units/unit.ts';
 import { readLock, type LockedQuantity, type LockedRevision } from './lock.ts';
 
 export interface Takes {
@@ -119,7 +120,7 @@ class TakeReader {
     const axes = quantity.axes.flatMap(({ name }) => (isAxisName(name) ? [name] : []));
     const column = { axes, data: Float64Array.from(flat(quantity.si)) };
     const shown = units === undefined ? unit : inSystem(unit, units);
-    const value = { type: { dimension: unit.dimension, kind: unit.kind }, column, unit: shown };
+    const value = { type: typeOfUnit(unit), column, unit: shown };
     return { node: this.node, value, revision: digest };
   }
 
@@ -142,7 +143,7 @@ function axisOf(name: AxisName, values: readonly (string | number)[], unitText: 
   const unit = parseUnit(unitText ?? '1');
   if (unit === null || !values.every((value) => typeof value === 'number')) return null;
   const coordinates = Float64Array.from(values, (value) => toSi(value, unit, NO_SITE));
-  return { name, coordinates, type: { dimension: unit.dimension, kind: unit.kind }, unit };
+  return { name, coordinates, type: typeOfUnit(unit), unit };
 }
 
 function flat(nested: Nested): number[] {

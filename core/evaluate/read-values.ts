@@ -1,6 +1,6 @@
 import { axisPoints, type NumericAxis } from '../axes/axis.ts';
 import { onlyValue, single } from '../axes/column.ts';
-import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
+import { error, type Diagnosed, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import type { EvaluatedInput, TypedNumber, Value } from '../report/evaluated-sheet.ts';
 import type { InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { toSi } from '../units/convert.ts';
@@ -9,7 +9,9 @@ import { parseQuantity } from '../units/parse-quantity.ts';
 import { isRange } from '../units/parse-range.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
-import { NO_SITE, type Site } from '../units/site.ts';
+import { missingState } from '../units/missing-state.ts';
+import { missingFromSite, NO_SITE, type Site } from '../units/site.ts';
+import { typeOfUnit } from '../units/unit.ts';
 import { article } from '../units/type-algebra.ts';
 import type { Overrides } from './overrides.ts';
 import type { Axes } from './read-axes.ts';
@@ -98,6 +100,7 @@ function overrideMisfit(node: InputNode, override: Text, set: TypedValue | undef
 
 /** K and degR may stand for a level as well as for a difference. */
 export function isSameKind(a: QuantityType, b: QuantityType): boolean {
+  if (a.amplitude !== undefined && b.amplitude !== undefined && a.amplitude !== b.amplitude) return false;
   return sameDimension(a.dimension, b.dimension) && (a.kind === b.kind || a.kind === 'open' || b.kind === 'open');
 }
 
@@ -109,18 +112,11 @@ function evaluatedInput(node: InputNode, { typed, ...value }: TypedValue): Evalu
 export function readValue(text: Text, site: Site, units: 'us' | 'si' | undefined): Diagnosed<TypedValue> {
   const { value: read, diagnostics } = parseQuantity(text.text, text.span);
   if (read === undefined) return { diagnostics };
-  if (read.unit.gauge && site.atmosphere === undefined) {
-    return { diagnostics: [...diagnostics, missingAtmosphere(text.span, read.unit.text)] };
-  }
+  const missing = missingFromSite(read.unit, site);
+  if (missing !== null) return { diagnostics: [...diagnostics, missingState(missing, read.unit, text.span)] };
   const si = toSi(read.number, read.unit, site);
-  const type = { dimension: read.unit.dimension, kind: read.unit.kind };
+  const type = typeOfUnit(read.unit);
   const unit = units === undefined ? read.unit : inSystem(read.unit, units);
   const typed = unit.text === read.unit.text ? { number: read.number, text: read.numberText } : null;
   return { value: { type, column: single(si), unit, typed }, diagnostics };
-}
-
-function missingAtmosphere(span: Span, unit: string): Diagnostic {
-  return error('ATMOSPHERE_MISSING', span, `\`${unit}\` is a gauge pressure, and the sheet states no atmosphere`, {
-    hints: ['add `atmosphere: 14.696 psia` (the pressure at your site) at the top of the sheet'],
-  });
 }

@@ -43,7 +43,11 @@ function inferMath(call: Call, fn: MathFunction, inference: Inference): Quantity
   const operands = inferred.filter((operand) => operand !== undefined);
   if (operands.length < inferred.length) return undefined;
   const typing = fn.typeOf(operands);
-  if ('type' in typing) return typing.type;
+  if ('type' in typing) {
+    const [first] = call.arguments;
+    if (typing.factor !== undefined && first !== undefined) inference.factors.set(first, typing.factor);
+    return typing.type;
+  }
   const at = typing.argument === undefined ? undefined : call.arguments[typing.argument];
   inference.reportFault(typing.fault, at?.span ?? call.span);
   return undefined;

@@ -16,7 +16,9 @@ import {
   type TypeResult,
 } from '../units/type-algebra.ts';
 import { convertType } from '../units/type-conversion.ts';
-import type { Unit } from '../units/unit.ts';
+import { missingFromSite } from '../units/site.ts';
+import { missingState } from '../units/missing-state.ts';
+import { typeOfUnit, type Unit } from '../units/unit.ts';
 import { constantValue } from './constant-value.ts';
 import { CONSTANTS } from './constants.ts';
 import { inferCall } from './infer-call.ts';
@@ -38,7 +40,7 @@ export function inferFormula(formula: Formula, scope: TypeScope): Diagnosed<Type
   if (typed === undefined) return { diagnostics };
   const { to } = formula;
   if (to === undefined) return { value: { formula, typed, type: typed.type, factor: 1 }, diagnostics };
-  const atmosphere = missingAtmosphere(to, scope);
+  const atmosphere = missingStates(to, scope);
   const converted = convertType(typed.type, to.unit);
   if ('fault' in converted) return { diagnostics: [...diagnostics, ...atmosphere, faultAt(converted.fault, to.span)] };
   if (atmosphere.length > 0) return { diagnostics: [...diagnostics, ...atmosphere] };
@@ -128,12 +130,11 @@ export class Inference {
   }
 
   private quantity(expression: Expression & { node: 'quantity' }): Inferred | undefined {
-    const missing = missingAtmosphere(expression, this.scope);
+    const missing = missingStates(expression, this.scope);
     this.diagnostics.push(...missing);
     if (missing.length > 0) return undefined;
     this.diagnostics.push(...unitOrName(expression, this.scope));
-    const { dimension, kind } = expression.unit;
-    return inferred({ dimension, kind }, { literal: true });
+    return inferred(typeOfUnit(expression.unit), { literal: true });
   }
 
   private name({ name, span }: Expression & { node: 'name' }): Inferred | undefined {
@@ -237,16 +238,9 @@ function sumPower(left: Inferred, right: Inferred): number {
   return left.piPower === right.piPower ? left.piPower : 0;
 }
 
-function missingAtmosphere(
-  { unit, span }: { readonly unit: Unit; readonly span: Span },
-  scope: TypeScope,
-): Diagnostic[] {
-  if (!unit.gauge || scope.site.atmosphere !== undefined) return [];
-  return [
-    error('ATMOSPHERE_MISSING', span, `\`${unit.text}\` is a gauge pressure, and the sheet states no atmosphere`, {
-      hints: ['add `atmosphere: 14.696 psia` (the pressure at your site) at the top of the sheet'],
-    }),
-  ];
+function missingStates({ unit, span }: { readonly unit: Unit; readonly span: Span }, scope: TypeScope): Diagnostic[] {
+  const missing = missingFromSite(unit, scope.site);
+  return missing === null ? [] : [missingState(missing, unit, span)];
 }
 
 function faultAt({ code, message, hints }: TypeFault, span: Span): Diagnostic {

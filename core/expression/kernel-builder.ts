@@ -150,7 +150,7 @@ export class KernelBuilder {
   private mathematics(call: Call): Register {
     const fn = MATHEMATICS.get(call.function);
     if (fn === undefined) throw new Error(`no function ${call.function}`);
-    const args = call.arguments.map((argument) => this.value(argument));
+    const args = call.arguments.map((argument) => this.scaled(argument));
     return this.push(`${fn.name}(${args.map(key).join()})`, args, (number, to) => ({
       op: 'mathematics',
       to,

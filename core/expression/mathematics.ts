@@ -1,11 +1,18 @@
 import type { FunctionResult } from '../library/function.ts';
 import { acos, asin, atan, cos, exp, log, log10, sin, tan } from '../numeric/math.ts';
-import type { QuantityType } from '../units/dimension.ts';
+import { amplitudeFactor, withAmplitude } from '../units/amplitude.ts';
+import type { Amplitude, QuantityType } from '../units/dimension.ts';
 import { describeType, isNumber, NUMBER } from '../units/dimensions.ts';
 import { article, compareTypes, squareRootType, type Operand, type TypeFault } from '../units/type-algebra.ts';
 
 /** Type of a call, or what is wrong with the types of its arguments, and with which of them. */
-export type MathTyping = { readonly type: QuantityType } | { readonly fault: TypeFault; readonly argument?: number };
+export type MathTyping =
+  | {
+      readonly type: QuantityType;
+      /** What the argument is multiplied by on the way, where it is not 1. */
+      readonly factor?: number;
+    }
+  | { readonly fault: TypeFault; readonly argument?: number };
 
 /** A function of mathematics: unlike those of the library, it takes several dimensions, and its result follows them. */
 export interface MathFunction {
@@ -97,6 +104,18 @@ const LIST: readonly MathFunction[] = [
     call: 'ceil(2.1)',
     result: '3',
   }),
+  amplitudeOf('as_peak', 'peak', 'Peak of a single sine, from any of its amplitudes', {
+    call: 'as_peak(4 mil pp)',
+    result: '2 mil pk',
+  }),
+  amplitudeOf('as_peak_to_peak', 'peak to peak', 'Peak-to-peak value of a single sine, from any of its amplitudes', {
+    call: 'as_peak_to_peak(2 mil pk)',
+    result: '4 mil pp',
+  }),
+  amplitudeOf('as_rms', 'rms', 'Root mean square of a single sine, from any of its amplitudes', {
+    call: 'as_rms(10 mm/s pk)',
+    result: '7.0710678118655 mm/s rms',
+  }),
 ];
 
 /** The functions of mathematics by name. */
@@ -183,6 +202,30 @@ function whole(
       x?.type.kind === 'percent' ? wholePercent() : numberWanted(x, { dimension: NUMBER, kind: 'plain' }),
     evaluate: ([x = NaN]) => value(fn(x)),
     tex: ([x = '']) => open + x + close,
+  };
+}
+
+function amplitudeOf(name: string, wanted: Amplitude, summary: string, example: Example): MathFunction {
+  return {
+    ...one(name, summary, 'a quantity that says its amplitude: `pk`, `pp` or `rms`'),
+    returns: 'the same quantity in the other amplitude',
+    validity: 'A single sine; other waves have no such factor.',
+    example,
+    typeOf: ([x]) => {
+      const given = x?.type.amplitude;
+      if (x === undefined || given === undefined) return { argument: 0, fault: unmarked() };
+      return { type: withAmplitude(x.type, wanted), factor: amplitudeFactor(given, wanted) };
+    },
+    evaluate: ([x = NaN]) => value(x),
+    tex: ([x = '']) => `\\operatorname{${name.replaceAll('_', '\\,')}}\\left(${x}\\right)`,
+  };
+}
+
+function unmarked(): TypeFault {
+  return {
+    code: 'AMPLITUDES_DIFFER',
+    message: 'the value does not say which amplitude it is',
+    hints: ['write it behind the unit: `pk`, `pp` or `rms`, as in `4 mil pp`; a step says it by `to mil pp`'],
   };
 }
 

@@ -19,6 +19,8 @@ const SPACE = /\s*/y;
 const WORD = /[A-Za-z_][A-Za-z0-9_]*/y;
 /** Anything that could belong to a unit written without spaces. */
 const UNIT_STRETCH = /[A-Za-zµμ°%][A-Za-z0-9_µμ°%²³⁴·*/^()-]*/y;
+/** Behind a unit, which amplitude it measures. */
+const AMPLITUDE = /[ \t]+(?:pk|pp|rms)(?![A-Za-z0-9_(])/y;
 /** Where a unit may end: behind a word, a power or a bracket. */
 const UNIT_PART = /[A-Za-z_µμ°%][A-Za-z0-9_µμ°%]*|\^-?\d+|\^\(-?\d+\)|[²³⁴)]/g;
 
@@ -130,7 +132,9 @@ function unitEnd(text: string, at: number): number | null {
   const length = ends
     .reverse()
     .find((end) => !/[A-Za-z0-9_]/.test(stretch.charAt(end)) && parseUnit(stretch.slice(0, end)) !== null);
-  return length === undefined ? null : at + length;
+  if (length === undefined) return null;
+  const end = at + length;
+  return matchAt(AMPLITUDE, text, end) ?? end;
 }
 
 /** `2 sqrt(x)` lacks an operator before a call; `5 psi (x)` lacks one behind a quantity. `min` is both, and is meant as a call. */

@@ -1,6 +1,6 @@
 import { HEAT_CAPACITY_RANGE } from './data/components.ts';
 import { componentById } from './find-component.ts';
-import { GAS_CONSTANT } from './gas-constant.ts';
+import { GAS_CONSTANT } from '../numeric/gas-constant.ts';
 import type { GasModel } from './gas-model.ts';
 import { molarMass } from './molar-mass.ts';
 

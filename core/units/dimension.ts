@@ -15,7 +15,12 @@ export type Dimension = readonly [length: number, mass: number, time: number, te
  */
 export type Kind = 'plain' | 'level' | 'difference' | 'open' | 'percent' | 'cycles' | 'radians' | 'root';
 
+/** Which measure of an oscillation a number is; nobody can tell from the number. */
+export type Amplitude = 'peak' | 'peak to peak' | 'rms';
+
 export interface QuantityType {
   readonly dimension: Dimension;
   readonly kind: Kind;
+  /** Not there for what does not oscillate, or does not say. */
+  readonly amplitude?: Amplitude;
 }

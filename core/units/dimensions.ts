@@ -32,6 +32,7 @@ export const SECOND_MOMENT_OF_AREA: Dimension = [4, 0, 0, 0, 0];
 export const THERMAL_CONDUCTIVITY: Dimension = [1, 1, -3, -1, 0];
 export const JOULE_THOMSON: Dimension = [1, -1, 2, 1, 0];
 export const HEAT_CAPACITY: Dimension = [2, 1, -2, -1, 0];
+export const MOLAR_FLOW: Dimension = [0, 0, -1, 0, 1];
 
 /** Names under which messages and reports speak of a dimension. Kinds of pressure and temperature add their own word. */
 const NAMES: readonly (readonly [Dimension, string])[] = [
@@ -67,6 +68,7 @@ const NAMES: readonly (readonly [Dimension, string])[] = [
   [THERMAL_CONDUCTIVITY, 'thermal conductivity'],
   [JOULE_THOMSON, 'temperature per pressure'],
   [HEAT_CAPACITY, 'heat capacity'],
+  [MOLAR_FLOW, 'molar flow'],
 ];
 
 const BASE_SYMBOLS = ['m', 'kg', 's', 'K', 'mol'] as const;
@@ -105,7 +107,12 @@ export function describeDimension(dimension: Dimension): string {
 }
 
 /** What a quantity is, in words: `force`, `pressure level`, `pressure difference`, `angular frequency`, `percentage`. */
-export function describeType({ dimension, kind }: QuantityType): string {
+export function describeType(type: QuantityType): string {
+  const bare = describeBare(type);
+  return type.amplitude === undefined ? bare : `${bare}, ${type.amplitude}`;
+}
+
+function describeBare({ dimension, kind }: QuantityType): string {
   const name = describeDimension(dimension);
   switch (kind) {
     case 'level':

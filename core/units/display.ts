@@ -1,7 +1,7 @@
 import type { Dimension, QuantityType } from './dimension.ts';
 import * as D from './dimensions.ts';
-import { parseUnit } from './parse-unit.ts';
-import type { Unit } from './unit.ts';
+import { bareUnit, parseUnit, unitOfAmplitude } from './parse-unit.ts';
+import { typeOfUnit, type Unit } from './unit.ts';
 
 type System = 'us' | 'si';
 
@@ -36,6 +36,7 @@ const DEFAULTS: readonly (readonly [Dimension, { readonly us: string; readonly s
   [D.UNBALANCE, { us: 'lbm*in', si: 'kg*m' }],
   [D.THERMAL_CONDUCTIVITY, { us: 'BTU/(h*ft*degF)', si: 'W/(m*K)' }],
   [D.JOULE_THOMSON, { us: 'degF/psi', si: 'K/bar' }],
+  [D.MOLAR_FLOW, { us: 'lbmol/h', si: 'kmol/h' }],
   [D.HEAT_CAPACITY, { us: 'BTU/degF', si: 'J/K' }],
 ];
 
@@ -72,10 +73,56 @@ const COUNTERPARTS: readonly (readonly [us: string, si: string])[] = [
   ['lbf/in', 'N/mm'],
   ['acfm', 'm^3/h'],
   ['gpm', 'm^3/h'],
+  ['SCF', 'Sm3'],
+  ['MMSCFD', 'Sm3/h'],
+  ['SCFM', 'Sm3/h'],
+  ['lbm/h', 'kg/h'],
+  ['lb/min', 'kg/min'],
 ];
 
 /** The unit in which a result of a type is shown by default. */
 export function displayUnit(type: QuantityType, system: System): Unit {
+  const unit = displayBare(type, system);
+  return type.amplitude === undefined ? unit : unitOfAmplitude(unit, type.amplitude);
+}
+
+/** Units that read better than the default where the largest value is below, or from there on above, a magnitude in SI. */
+const BY_MAGNITUDE: readonly {
+  readonly dimension: Dimension;
+  readonly system: System;
+  readonly below?: number;
+  readonly from?: number;
+  readonly unit: string;
+}[] = [
+  { dimension: D.LENGTH, system: 'us', below: 0.02 * 0.0254, unit: 'mil' },
+  { dimension: D.LENGTH, system: 'us', from: 20 * 0.3048, unit: 'ft' },
+  { dimension: D.LENGTH, system: 'si', below: 1e-4, unit: 'um' },
+  { dimension: D.LENGTH, system: 'si', from: 10, unit: 'm' },
+  { dimension: D.FORCE, system: 'si', from: 1e4, unit: 'kN' },
+  { dimension: D.ENERGY, system: 'si', from: 1e5, unit: 'kJ' },
+  { dimension: D.POWER, system: 'si', below: 1e3, unit: 'W' },
+  { dimension: D.POWER, system: 'si', from: 1e7, unit: 'MW' },
+];
+
+/**
+ * The unit in which a result is shown where nothing else is asked for: by its type, and by how large it is.
+ *
+ * @param magnitude SI; the largest of several values, which all are shown in one unit
+ */
+export function displayUnitFor(type: QuantityType, system: System, magnitude: number): Unit {
+  const row = BY_MAGNITUDE.find(
+    (each) =>
+      each.system === system &&
+      D.sameDimension(each.dimension, type.dimension) &&
+      magnitude > 0 &&
+      magnitude < (each.below ?? Number.POSITIVE_INFINITY) &&
+      magnitude >= (each.from ?? 0),
+  );
+  if (row === undefined) return displayUnit(type, system);
+  return type.amplitude === undefined ? known(row.unit) : unitOfAmplitude(known(row.unit), type.amplitude);
+}
+
+function displayBare(type: QuantityType, system: System): Unit {
   const special = specialUnit(type, system);
   if (special !== undefined) return known(special);
   const row = DEFAULTS.find(([dimension]) => D.sameDimension(dimension, type.dimension));
@@ -98,12 +145,13 @@ function specialUnit({ dimension, kind }: QuantityType, system: System): string 
 
 /** The unit itself where it belongs to the system (or to both), else its counterpart. */
 export function inSystem(unit: Unit, system: System): Unit {
+  if (unit.amplitude !== undefined) return unitOfAmplitude(inSystem(bareUnit(unit), system), unit.amplitude);
   if (unit.system === 'both' || unit.system === system) return unit;
   const [from, to] = system === 'si' ? ([0, 1] as const) : ([1, 0] as const);
   const pair = COUNTERPARTS.find((names) => names[from] === unit.text);
   if (pair !== undefined) return known(pair[to]);
   if (unit.gauge) return known(system === 'us' ? 'psig' : 'barg');
-  return displayUnit({ dimension: unit.dimension, kind: unit.kind }, system);
+  return displayUnit(typeOfUnit(unit), system);
 }
 
 const ABSOLUTE: ReadonlyMap<string, string> = new Map([

@@ -1,6 +1,7 @@
 import { nearest } from '../diagnostics/nearest.ts';
 import { power } from '../numeric/math.ts';
-import type { Kind } from './dimension.ts';
+import { AMPLITUDE_WORDS, amplitudeWord } from './amplitude.ts';
+import type { Amplitude, Kind } from './dimension.ts';
 import { isNumber, multiplyDimensions, NUMBER, powerDimension } from './dimensions.ts';
 import { namedUnit, UNIT_NAMES } from './table.ts';
 import { computedType } from './type-algebra.ts';
@@ -16,6 +17,32 @@ const MAX_LENGTH = 60;
  * @returns null when the text is not a unit
  */
 export function parseUnit(text: string): Unit | null {
+  const [, bare, word] = AMPLITUDE.exec(text.trim()) ?? [];
+  if (bare === undefined || word === undefined) return parseBare(text);
+  const unit = parseBare(bare);
+  const amplitude = AMPLITUDE_WORDS.get(word);
+  return unit === null || amplitude === undefined || unit.kind === 'level' ? null : unitOfAmplitude(unit, amplitude);
+}
+
+/** A unit behind which a word says which amplitude it measures: `mil pp`, `mm/s rms`, `in/s pk`. */
+const AMPLITUDE = /^(.*\S)\s+(pk|pp|rms)$/;
+
+/** A unit that measures an amplitude, whatever it measured before. */
+export function unitOfAmplitude(unit: Unit, amplitude: Amplitude): Unit {
+  const bare = bareUnit(unit);
+  const word = amplitudeWord(amplitude);
+  return { ...bare, text: `${bare.text} ${word}`, tex: `${bare.tex}\\ \\text{${word}}`, amplitude };
+}
+
+/** A unit without its amplitude. */
+export function bareUnit(unit: Unit): Unit {
+  if (unit.amplitude === undefined) return unit;
+  const bare = parseBare(AMPLITUDE.exec(unit.text)?.[1] ?? '');
+  if (bare === null) throw new Error(`no unit in ${unit.text}`);
+  return bare;
+}
+
+function parseBare(text: string): Unit | null {
   const written = plainSpelling(text);
   if (written === '' || written.length > MAX_LENGTH) return null;
   const named = namedUnit(written);
@@ -27,6 +54,11 @@ export function parseUnit(text: string): Unit | null {
 
 /** Units that were probably meant: common slips first, then the nearest names. */
 export function suggestUnits(text: string): string[] {
+  const [, bare, word] = AMPLITUDE.exec(text.trim()) ?? [];
+  if (bare !== undefined && word !== undefined) {
+    const isLevel = parseBare(bare)?.kind === 'level';
+    return (isLevel ? (DIFFERENCES.get(bare.trim()) ?? []) : suggestUnits(bare)).map((unit) => `${unit} ${word}`);
+  }
   const slip = SLIPS.get(text.trim()) ?? SLIPS.get(text.trim().toLowerCase());
   if (slip !== undefined) return [...slip];
   const power = /^([A-Za-z]+)([234])$/.exec(text.trim());
@@ -36,6 +68,18 @@ export function suggestUnits(text: string): string[] {
   const sameLetters = near.filter((name) => name.toLowerCase() === text.trim().toLowerCase());
   return sameLetters.length > 0 ? sameLetters : near;
 }
+
+/** An amplitude is a difference; this one is meant where a level is written. */
+const DIFFERENCES: ReadonlyMap<string, readonly string[]> = new Map([
+  ['psig', ['psi']],
+  ['psia', ['psi']],
+  ['barg', ['bar']],
+  ['bara', ['bar']],
+  ['kPag', ['kPa']],
+  ['kPaa', ['kPa']],
+  ['degC', ['delta_degC']],
+  ['degF', ['delta_degF']],
+]);
 
 const SLIPS: ReadonlyMap<string, readonly string[]> = new Map([
   ['c', ['degC']],
@@ -162,6 +206,8 @@ class UnitParser {
 function compound(text: string, factors: readonly Factor[]): Unit | null {
   if (factors.some(({ unit }) => unit.gauge || (unit.kind === 'level' && unit.shift === 0))) return null;
   if (factors.length === 1 && factors[0]?.exponent === 1) return factors[0].unit;
+  const reference = compoundReference(factors);
+  if (reference === null) return null;
   let dimension = NUMBER;
   let factor = 1;
   for (const { unit, exponent } of factors) {
@@ -178,7 +224,20 @@ function compound(text: string, factors: readonly Factor[]): Unit | null {
     shift: 0,
     gauge: false,
     system: systemOf(factors),
+    ...(reference === undefined ? {} : { reference }),
   };
+}
+
+/** Of normal and standard volumes in one unit nobody could tell which amount is meant: null. */
+function compoundReference(factors: readonly Factor[]): Unit['reference'] | null {
+  const references = factors.flatMap(({ unit, exponent }) =>
+    unit.reference === undefined ? [] : [{ state: unit.reference.state, power: unit.reference.power * exponent }],
+  );
+  const [first] = references;
+  if (first === undefined) return undefined;
+  if (references.some(({ state }) => state !== first.state)) return null;
+  const sum = references.reduce((total, reference) => total + reference.power, 0);
+  return sum === 0 ? undefined : { state: first.state, power: sum };
 }
 
 /** `rev/s` and `deg/s` keep counting what they count; `m*rad/s` does not. */

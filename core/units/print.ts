@@ -47,9 +47,15 @@ export function printNumber(number: number, digits: number = DEFAULT_DIGITS): st
   return number.toFixed(Math.max(0, digits - 1 - exponent));
 }
 
+/** Powers of ten in threes, as engineers write them: `105.0e-6`, `12.35e6`. */
 function withPower(number: number, digits: number): string {
   const [mantissa = '', exponent = '0'] = number.toExponential(digits - 1).split('e');
-  return `${mantissa}e${Number(exponent)}`;
+  const third = Math.floor(Number(exponent) / 3) * 3;
+  const moved = Number(exponent) - third;
+  const sign = mantissa.startsWith('-') ? '-' : '';
+  const all = mantissa.replace(/[-.]/g, '').padEnd(moved + 1, '0');
+  const [whole, rest] = [all.slice(0, moved + 1), all.slice(moved + 1)];
+  return `${sign}${whole}${rest === '' ? '' : `.${rest}`}e${third}`;
 }
 
 function printed(number: string, unit: Unit): Printed {

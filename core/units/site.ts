@@ -1,3 +1,5 @@
+import type { Unit } from './unit.ts';
+
 /** The pressure and temperature at which a volume of gas stands for an amount of it. */
 export interface ReferenceState {
   /** Absolute, Pa. */
@@ -14,6 +16,12 @@ export interface Site {
   readonly normal?: ReferenceState;
   /** Behind `Sm3` and `SCF`. */
   readonly standard?: ReferenceState;
+}
+
+/** What a unit rests on that a site does not state; null where nothing is missing. */
+export function missingFromSite({ gauge, reference }: Unit, site: Site): keyof Site | null {
+  if (gauge && site.atmosphere === undefined) return 'atmosphere';
+  return reference !== undefined && site[reference.state] === undefined ? reference.state : null;
 }
 
 export const NO_SITE: Site = {};

@@ -13,6 +13,7 @@ const FOOT = 0.3048;
 const POUND = 0.45359237;
 const GRAVITY = 9.80665;
 const POUND_FORCE = POUND * GRAVITY;
+const CUBIC_FOOT = FOOT * FOOT * FOOT;
 const PSI = POUND_FORCE / (INCH * INCH);
 const BTU = 1055.05585262;
 const RANKINE = 5 / 9;
@@ -26,6 +27,7 @@ interface Extra {
   readonly kind?: Kind;
   readonly shift?: number;
   readonly gauge?: boolean;
+  readonly reference?: 'normal' | 'standard';
   readonly tex?: string;
   readonly aliases?: readonly string[];
 }
@@ -33,6 +35,7 @@ interface Extra {
 const level: Extra = { kind: 'level' };
 const gauge: Extra = { kind: 'level', gauge: true };
 const difference: Extra = { kind: 'difference' };
+const standard: Extra = { reference: 'standard' };
 const cycles: Extra = { kind: 'cycles' };
 const radians: Extra = { kind: 'radians' };
 
@@ -96,6 +99,19 @@ const ROWS: readonly Row[] = [
   ['kmol', D.AMOUNT, 1000, 'si'],
   ['lbmol', D.AMOUNT, POUND * 1000, 'us'],
 
+  // Volumes at a reference state of the sheet: amounts, whose factor takes p/(R T) of that state along.
+  ['Nm3', D.AMOUNT, 1, 'si', { reference: 'normal', tex: '\\mathrm{Nm^3}' }],
+  ['Sm3', D.AMOUNT, 1, 'si', { reference: 'standard', tex: '\\mathrm{Sm^3}' }],
+  ['SCF', D.AMOUNT, CUBIC_FOOT, 'us', standard],
+  ['MSCF', D.AMOUNT, CUBIC_FOOT * 1e3, 'us', standard],
+  ['MMSCF', D.AMOUNT, CUBIC_FOOT * 1e6, 'us', standard],
+  ['SCFM', D.MOLAR_FLOW, CUBIC_FOOT / 60, 'us', standard],
+  ['SCFH', D.MOLAR_FLOW, CUBIC_FOOT / 3600, 'us', standard],
+  ['MSCFD', D.MOLAR_FLOW, (CUBIC_FOOT * 1e3) / 86_400, 'us', standard],
+  ['MMSCFD', D.MOLAR_FLOW, (CUBIC_FOOT * 1e6) / 86_400, 'us', standard],
+
+  ['gn', D.ACCELERATION, GRAVITY, 'both', { tex: 'g_{\\mathrm{n}}' }],
+
   ['N', D.FORCE, 1, 'si'],
   ['kN', D.FORCE, 1000, 'si'],
   ['MN', D.FORCE, 1e6, 'si'],
@@ -111,6 +127,7 @@ const ROWS: readonly Row[] = [
   ['mbar', D.PRESSURE, 100, 'si', difference],
   ['atm', D.PRESSURE, 101_325, 'both', difference],
   ['mmHg', D.PRESSURE, MERCURY * 1e-3, 'si', difference],
+  ['mmH2O', D.PRESSURE, WATER * 1e-3, 'si', { kind: 'difference', tex: '\\mathrm{mmH_2O}' }],
   ['torr', D.PRESSURE, 101_325 / 760, 'si', difference],
   ['psi', D.PRESSURE, PSI, 'us', difference],
   ['ksi', D.PRESSURE, PSI * 1000, 'us', difference],
@@ -142,7 +159,7 @@ const ROWS: readonly Row[] = [
   ['L', D.VOLUME, 1e-3, 'si'],
   ['mL', D.VOLUME, 1e-6, 'si'],
   ['gal', D.VOLUME, GALLON, 'us'],
-  ['acfm', D.VOLUME_FLOW, (FOOT * FOOT * FOOT) / 60, 'us', { aliases: ['cfm'] }],
+  ['acfm', D.VOLUME_FLOW, CUBIC_FOOT / 60, 'us', { aliases: ['cfm'] }],
   ['gpm', D.VOLUME_FLOW, GALLON / 60, 'us'],
 
   ['P', D.DYNAMIC_VISCOSITY, 0.1, 'both'],
@@ -167,6 +184,7 @@ function fromRow([text, dimension, factor, system, extra = {}]: Row): Unit {
     shift: extra.shift ?? 0,
     gauge: extra.gauge ?? false,
     system,
+    ...(extra.reference === undefined ? {} : { reference: { state: extra.reference, power: 1 } }),
   };
 }
 

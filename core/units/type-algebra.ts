@@ -1,5 +1,6 @@
 import type { DiagnosticCode } from '../diagnostics/codes.ts';
 import type { Dimension, Kind, QuantityType } from './dimension.ts';
+import { alike, divided, multiplied } from './amplitude.ts';
 import {
   describeType,
   divideDimensions,
@@ -46,6 +47,10 @@ export function computedType(dimension: Dimension): QuantityType {
  * An `open` operand (K, degR) next to a level is a difference, since two levels are never added.
  */
 export function addTypes(a: Operand, b: Operand): TypeResult {
+  return alike(a.type, b.type, 'added', sumType(a, b));
+}
+
+function sumType(a: Operand, b: Operand): TypeResult {
   const [left, right] = [a.type, b.type];
   if (!sameDimension(left.dimension, right.dimension)) return mismatch('added', left, right);
   if (isTurning(left.kind) || isTurning(right.kind)) return turningSum('added', left, right);
@@ -62,6 +67,10 @@ export function addTypes(a: Operand, b: Operand): TypeResult {
  * could be a level as well, and the two readings differ by 273 K.
  */
 export function subtractTypes(a: Operand, b: Operand): TypeResult {
+  return alike(a.type, b.type, 'subtracted', differenceType(a, b));
+}
+
+function differenceType(a: Operand, b: Operand): TypeResult {
   const [left, right] = [a.type, b.type];
   if (!sameDimension(left.dimension, right.dimension)) return mismatch('subtracted', left, right);
   if (isTurning(left.kind) || isTurning(right.kind)) return turningSum('subtracted', left, right);
@@ -113,6 +122,10 @@ export function negateType({ type }: Operand): TypeResult {
  * dimension counts with its absolute magnitude. Cycles times a number made with `pi` are radians.
  */
 export function multiplyTypes(a: Operand, b: Operand): TypeResult {
+  return multiplied(a.type, b.type, productType(a, b));
+}
+
+function productType(a: Operand, b: Operand): TypeResult {
   const dimension = multiplyDimensions(a.type.dimension, b.type.dimension);
   if (isNumber(a.type.dimension) && !isAngle(a.type.kind)) return { type: scaledType(b, a) };
   if (isNumber(b.type.dimension) && !isAngle(b.type.kind)) return { type: scaledType(a, b) };
@@ -138,6 +151,10 @@ function scaledType(quantity: Operand, factor: Operand): QuantityType {
 
 /** Type of a / b. Level / level is a plain ratio; radians or a root over a number made with `pi` are cycles. */
 export function divideTypes(a: Operand, b: Operand): TypeResult {
+  return divided(a.type, b.type, quotientType(a, b));
+}
+
+function quotientType(a: Operand, b: Operand): TypeResult {
   const dimension = divideDimensions(a.type.dimension, b.type.dimension);
   if (isNumber(b.type.dimension) && !isAngle(b.type.kind)) return { type: dividedType(a, b) };
   if (isTurning(a.type.kind) && isTurning(b.type.kind)) return turningRatio(a.type, b.type, dimension);
@@ -179,6 +196,10 @@ export function squareRootType(a: Operand): TypeResult {
 
 /** Checks that two sides can be compared, or be the smaller and the larger of each other; gives their common type. */
 export function compareTypes(a: Operand, b: Operand): TypeResult {
+  return alike(a.type, b.type, 'compared', commonType(a, b));
+}
+
+function commonType(a: Operand, b: Operand): TypeResult {
   const [left, right] = [a.type, b.type];
   if (!sameDimension(left.dimension, right.dimension)) return mismatch('compared', left, right);
   if (isTurning(left.kind) || isTurning(right.kind)) return turningSum('compared', left, right);

@@ -1,5 +1,6 @@
 import type { Kind, QuantityType } from './dimension.ts';
 import { describeDimension, describeType, FREQUENCY, isNumber, PRESSURE, sameDimension } from './dimensions.ts';
+import { amplitudesDiffer, withAmplitude } from './amplitude.ts';
 import { article, type TypeFault } from './type-algebra.ts';
 import type { Unit } from './unit.ts';
 
@@ -11,6 +12,17 @@ export type ConversionResult = { readonly type: QuantityType; readonly factor: n
  * the one place, with {@link acceptType}, where cycles become radians.
  */
 export function convertType(from: QuantityType, unit: Unit): ConversionResult {
+  if (from.amplitude !== undefined && unit.amplitude !== undefined && from.amplitude !== unit.amplitude) {
+    const { code, hints } = amplitudesDiffer(from.amplitude, unit.amplitude, '');
+    return fault(code, `${article(describeType(from))} cannot be shown in \`${unit.text}\``, hints);
+  }
+  const converted = convertBare(from, unit);
+  if ('fault' in converted) return converted;
+  // A unit that names an amplitude states it; one that names none leaves it as it is.
+  return { ...converted, type: withAmplitude(converted.type, unit.amplitude ?? from.amplitude) };
+}
+
+function convertBare(from: QuantityType, unit: Unit): ConversionResult {
   const wanted: QuantityType = { dimension: unit.dimension, kind: unit.kind };
   if (!sameDimension(from.dimension, unit.dimension)) {
     return {

@@ -1,4 +1,4 @@
-import type { Dimension, Kind } from './dimension.ts';
+import type { Amplitude, Dimension, Kind, QuantityType } from './dimension.ts';
 
 export type UnitSystem = 'us' | 'si' | 'both';
 
@@ -17,4 +17,12 @@ export interface Unit {
   /** A gauge pressure: the sheet's atmosphere is added as well. */
   readonly gauge: boolean;
   readonly system: UnitSystem;
+  readonly amplitude?: Amplitude;
+  /** A volume that stands for an amount: the sheet's reference state goes in, to this power. */
+  readonly reference?: { readonly state: 'normal' | 'standard'; readonly power: number };
+}
+
+/** The type of what is written in a unit. */
+export function typeOfUnit({ dimension, kind, amplitude }: Unit): QuantityType {
+  return amplitude === undefined ? { dimension, kind } : { dimension, kind, amplitude };
 }

@@ -18,10 +18,16 @@ import {
 import type { Unit } from '../../core/units/unit.ts';
 
 const ATMOSPHERE = 95_837.122_6;
-const SITE = { atmosphere: ATMOSPHERE };
+const SITE = {
+  atmosphere: ATMOSPHERE,
+  normal: { pressure: 101_325, temperature: 273.15 },
+  standard: { pressure: 101_560, temperature: 288.706 },
+};
 const unit = fc.constantFrom(...ALL_UNITS);
 const factor = fc.constantFrom(
-  ...ALL_UNITS.filter(({ gauge, kind, text }) => !gauge && kind === 'plain' && text !== '1'),
+  ...ALL_UNITS.filter(
+    ({ gauge, kind, text, reference }) => !gauge && kind === 'plain' && text !== '1' && reference === undefined,
+  ),
 );
 const exponent = fc.constantFrom(1, 2, 3, -1, -2);
 const number = fc.double({ min: -1e6, max: 1e6, noNaN: true });

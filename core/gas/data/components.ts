@@ -1,4 +1,4 @@
-import { GAS_CONSTANT } from '../gas-constant.ts';
+import { GAS_CONSTANT } from '../../numeric/gas-constant.ts';
 
 /** A pure substance that a gas may hold. */
 export interface Component {

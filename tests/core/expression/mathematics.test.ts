@@ -9,7 +9,7 @@ const ALL = [...MATHEMATICS.values()];
 it('offers what the catalogue promises', () => {
   expect([...MATHEMATICS.keys(), ...CONSTANTS.keys()]).toEqual([
     'sqrt', 'abs', 'min', 'max', 'mean', 'sin', 'cos', 'tan', 'asin', 'acos', 'atan', 'exp', 'ln', 'log10', 'round',
-    'floor', 'ceil', 'pi', 'e',
+    'floor', 'ceil', 'as_peak', 'as_peak_to_peak', 'as_rms', 'pi', 'e',
   ]); // prettier-ignore
 });
 

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { COMPONENT_IDS } from '../../../core/gas/find-component.ts';
-import { GAS_CONSTANT } from '../../../core/gas/gas-constant.ts';
+import { GAS_CONSTANT } from '../../../core/numeric/gas-constant.ts';
 import type { GasModel } from '../../../core/gas/gas-model.ts';
 import { molarMass } from '../../../core/gas/molar-mass.ts';
 import { gasProperty, type GasProperty } from '../../../core/gas/properties.ts';
