@@ -1,6 +1,8 @@
-import { Command, CommanderError } from 'commander';
+import { Argument, Command, CommanderError, Option } from 'commander';
 import { CORE_VERSION } from '../core/version.ts';
 import { evaluatingCommands } from './evaluating-commands.ts';
+import { SHELLS, type Shell } from './completion/shells.ts';
+import type { LintOptions } from './commands/lint.ts';
 import { CommandFailure, EXIT, type ExitStatus } from './exit-status.ts';
 import { harmlessText } from './output/harmless.ts';
 import { jsonFormat } from './options.ts';
@@ -118,10 +120,15 @@ function sheetCommands(program: Command, execute: Execute): void {
     .command('lint')
     .argument('<file...>', 'sheets to check; - reads standard input')
     .description('diagnostics only')
-    .addOption(jsonFormat())
+    .addOption(
+      new Option('--format <format>', 'form of the answer').choices(['text', 'short', 'json', 'sarif']).default('text'),
+    )
     .option('--strict', 'warnings make the exit status 2')
-    .addHelpText('before', 'Examples:\n  antinode lint sheet.yaml\n  antinode lint *.yaml --format json\n')
-    .action((files: string[], options: { format: 'text' | 'json'; strict?: true }) =>
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode lint sheet.yaml\n  antinode lint *.yaml --format sarif > antinode.sarif\n',
+    )
+    .action((files: string[], options: LintOptions) =>
       execute(async (at) => (await import('./commands/lint.ts')).lint(files, options, at)),
     );
 
@@ -158,6 +165,17 @@ function catalogueCommands(program: Command, execute: Execute): void {
     .addHelpText('before', 'Examples:\n  antinode units\n  antinode units 905 psia\n')
     .action((text: string[], options: { format: 'text' | 'json' }) =>
       execute(async (at) => (await import('./commands/units.ts')).units(text.join(' '), options, at)),
+    );
+  program
+    .command('completion')
+    .addArgument(new Argument('<shell>', 'shell to complete in').choices(SHELLS))
+    .description('a completion script, for the shell to read')
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode completion bash > ~/.local/share/bash-completion/completions/antinode\n  antinode completion fish > ~/.config/fish/completions/antinode.fish\n  antinode completion zsh > ~/.zsh/functions/_antinode\n',
+    )
+    .action((shell: Shell) =>
+      execute(async (at) => (await import('./commands/completion.ts')).completion(shell, program, at)),
     );
 }
 

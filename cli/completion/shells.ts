@@ -1,0 +1,4 @@
+/** Shells for which there is a completion script. */
+export const SHELLS = ['bash', 'zsh', 'fish'] as const;
+
+export type Shell = (typeof SHELLS)[number];
