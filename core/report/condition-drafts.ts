@@ -37,12 +37,7 @@ export function columnDraft(column: EvaluatedColumn, context: DraftContext): Dra
     return { block: { block: 'column', ...base, holds: column.column, cells: typed }, content, uses };
   }
   const { value } = column;
-  const printed = cells.map((_, cell) => {
-    const asTyped = column.typed[cell];
-    return asTyped !== null && asTyped !== undefined && node.digits === undefined
-      ? printTyped(asTyped.text, value.unit).number
-      : printCell(value, cell, node.digits, context).number;
-  });
+  const printed = cells.map((_, cell) => conditionNumber(column, cell, context));
   return {
     block: {
       block: 'input',
@@ -56,6 +51,18 @@ export function columnDraft(column: EvaluatedColumn, context: DraftContext): Dra
     content,
     uses: value.unit.gauge ? [ATMOSPHERE_PATH] : [],
   };
+}
+
+/** The value of one condition, with the digits it was typed with. */
+export function conditionNumber(
+  { node, value, typed }: EvaluatedColumn & { readonly column: 'quantity' },
+  cell: number,
+  context: DraftContext,
+): string {
+  const asTyped = typed[cell];
+  return asTyped !== null && asTyped !== undefined && node.digits === undefined
+    ? printTyped(asTyped.text, value.unit).number
+    : printCell(value, cell, node.digits, context).number;
 }
 
 function idsOf({ sheet }: DraftContext): readonly string[] {

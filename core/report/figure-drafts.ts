@@ -6,11 +6,12 @@ import { expressionTex } from '../expression/tex.ts';
 import type { TableNode } from '../sheet/document.ts';
 import { fromSi } from '../units/convert.ts';
 import { place, plainText, type Draft, type DraftContext } from './draft.ts';
+import { conditionNumber } from './condition-drafts.ts';
 import type { EvaluatedFigure, Value } from './evaluated-sheet.ts';
 import type { FigureBlock, ReportAxis } from './model.ts';
-import { printCell } from './print-value.ts';
+import { printCell, printInput } from './print-value.ts';
 import { symbolic, usedPaths } from './section-drafts.ts';
-import { valueOf } from './values.ts';
+import { valueOf, type NamedValue } from './values.ts';
 
 /** What each kind of figure runs along; the others run along the innermost axis. */
 const ALONG: Readonly<Partial<Record<FigureBlock['kind'], AxisName>>> = {
@@ -140,9 +141,7 @@ export function tableDraft(path: string, node: TableNode, context: DraftContext)
   const axis = axisName && axes.get(axisName);
   const rows = Array.from({ length: axis === undefined ? 1 : axisLength(axis) }, (_, row) => ({
     at: axis === undefined ? '' : pointText(axis, row),
-    cells: columns.map(
-      ({ value, digits }) => printCell(value, value.column.axes.length === 0 ? 0 : row, digits, context).number,
-    ),
+    cells: columns.map((column) => cellNumber(column, row, context)),
   }));
   const uses = columns.flatMap(({ name }) => context.pathOf(name) ?? []);
   const [first] = node.of;
@@ -171,6 +170,18 @@ export function tableDraft(path: string, node: TableNode, context: DraftContext)
     },
     uses,
   };
+}
+
+/** A typed value keeps its digits in a table too. */
+function cellNumber(
+  { name, value, digits, typed }: NamedValue & { readonly name: string },
+  row: number,
+  context: DraftContext,
+): string {
+  const column = context.sheet.columns.find(({ node }) => node.name.text === name);
+  if (column?.column === 'quantity') return conditionNumber(column, row, context);
+  if (value.column.axes.length === 0) return printInput(value, typed, digits, context).number;
+  return printCell(value, row, digits, context).number;
 }
 
 function labelOf(name: string, { sheet }: DraftContext): string {

@@ -11,11 +11,17 @@ import type { Extreme } from './model.ts';
 export function printValue(value: Value, digits: number | undefined, context: DraftContext): Printed {
   const { least, greatest } = extremes(value.column);
   const [from, to] = [value.column.data[least] ?? Number.NaN, value.column.data[greatest] ?? Number.NaN];
-  return printSpread(from, to, value.unit, printOptions(digits, context));
+  return printSpread(from, to, value.unit, printOptions(digitsOf(value, digits), context));
 }
 
 export function printCell(value: Value, cell: number, digits: number | undefined, context: DraftContext): Printed {
-  return printQuantity(value.column.data[cell] ?? Number.NaN, value.unit, printOptions(digits, context));
+  return printQuantity(value.column.data[cell] ?? Number.NaN, value.unit, printOptions(digitsOf(value, digits), context));
+}
+
+/** Orders and other whole numbers over an axis need no decimals. */
+function digitsOf({ column, unit }: Value, digits: number | undefined): number | undefined {
+  const isCount = unit.text === '1' && column.axes.length > 0 && column.data.every(Number.isInteger);
+  return digits ?? (isCount ? 1 : undefined);
 }
 
 /** An input keeps the digits it was typed with, as long as it is shown in the unit it was typed in. */

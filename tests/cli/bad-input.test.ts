@@ -179,6 +179,7 @@ function expectFailedReport(out: string): readonly LocatedDiagnostic[] {
     antinode: 'report/1',
     core: expect.stringMatching(/^\d+\.\d+\.\d+/) as string,
     sheet: { number: '', title: '', digest: '' },
+    axes: [],
     quantities: {},
     checks: [],
     holds: [],

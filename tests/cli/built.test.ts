@@ -47,6 +47,10 @@ describe('the built program', () => {
       ['units', '905', 'psia'],
       ['new', 'study', 'made'],
       ['lint', 'sheet.yaml'],
+      ['explain', EXAMPLE, 'F'],
+      ['compare', EXAMPLE, EXAMPLE],
+      ['completion', 'bash'],
+      ['run', EXAMPLE, '--sensitivity'],
       ['logout'],
       ['serve', '--help'],
     ];

@@ -63,7 +63,24 @@ describe('functions', () => {
   });
 
   it('tells about the functions of mathematics as well', async () => {
-    expect(await cli(['functions', 'sqrt'])).toMatchObject({ status: 0, out: 'sqrt: Square root\n' });
+    const { status, out } = await cli(['functions', 'sqrt']);
+    expect(status).toBe(0);
+    expect(out).toMatch(/^sqrt\(x\)\n {2}Square root\n[^]*takes[^]*example {3}sqrt\(9 m\^2\) = 3 m\n$/);
+  });
+
+  it('tells about the functions along axes, alone and together', async () => {
+    expect((await cli(['functions', 'max_over'])).out).toContain('max_over(x, axis)');
+    const { out } = await cli(['functions', 'axes']);
+    for (const name of ['max_over', 'envelope', 'where', 'interpolate', 'harmonics']) expect(out).toContain(`${name}(`);
+    expect(JSON.parse((await cli(['functions', 'where', '--format', 'json'])).out)).toMatchObject({
+      functions: [{ name: 'where', topic: 'axes' }],
+    });
+  });
+
+  it('lists one topic in full', async () => {
+    const { out } = await cli(['functions', 'pipe']);
+    expect(out).toContain('pipe_bore(nps, schedule)');
+    expect(out).not.toContain('speed_of_sound');
   });
 
   it.each([

@@ -48,7 +48,7 @@ describe('completion in bash', () => {
       (match) => match[1],
     );
     expect(commands.length).toBeGreaterThan(12);
-    for (const command of commands) expect(offered('')).toContain(command);
+    for (const command of commands.filter((name) => name !== 'help')) expect(offered('')).toContain(command);
   });
 });
 

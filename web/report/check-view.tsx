@@ -24,6 +24,12 @@ export const CheckView = memo(function CheckView({ block, isCurrent, shared }: B
         <Tex tex={block.formula} className="an-link" />
         {block.substituted !== block.formula && <Tex tex={block.substituted} className="an-link an-substituted" />}
       </div>
+      {block.at !== undefined && block.points !== undefined && (
+        <p className="an-spread">
+          governs at {block.at}
+          {block.points.failed > 0 && `; fails at ${block.points.failed} of ${block.points.all} points`}
+        </p>
+      )}
       {block.note !== undefined && <p className="an-note">{block.note}</p>}
       <Trace block={block} blocks={shared.blocks} />
     </Frame>

@@ -31,12 +31,13 @@ export const GasView = memo(function GasView({ block, isCurrent, shared }: Block
       <table className="an-fractions">
         <caption className="an-hidden">Composition of {block.label}, mole percent</caption>
         <tbody>
-          {block.fractions.map(({ component, percent }) => (
+          {block.fractions.map(({ component, percent, tolerance }) => (
             <tr key={component}>
               <th scope="row">{componentName(component)}</th>
               <td>
                 <AlignedNumber number={percent} tail={tail} />
                 <span className="an-unit">{'\u2009'}%</span>
+                {tolerance !== undefined && <span className="an-tolerance">{tolerance}</span>}
               </td>
             </tr>
           ))}

@@ -2,6 +2,7 @@ import { memo } from 'react';
 import type { InputBlock } from '../../core/report/model.ts';
 import { Aside, blockAttributes } from './frame.tsx';
 import type { BlockProps, SharedParts } from './shared.ts';
+import { Expected } from './spread.tsx';
 import { HoldWord } from './standing.tsx';
 import { Tex } from './tex.tsx';
 import { AlignedNumber, longestTail, UnitText } from './typeset.tsx';
@@ -54,12 +55,18 @@ const InputRow = memo(function InputRow({ block, isCurrent, shared, tail }: Inpu
         <Aside block={block} shared={shared} />
         {block.label}
         {block.note !== undefined && <span className="an-note">{block.note}</span>}
+        {block.expect !== undefined && (
+          <span className="an-note">
+            <Expected expect={block.expect} />
+          </span>
+        )}
       </th>
       <td className="an-column-symbol">
         <Tex tex={block.symbol} />
       </td>
       <td className="an-column-value">
         <AlignedNumber number={block.printed.number} tail={tail} />
+        {block.tolerance !== undefined && <span className="an-tolerance">{block.tolerance}</span>}
       </td>
       <td className="an-column-unit">
         <UnitText unit={block.printed.unit} />

@@ -20,7 +20,10 @@ interface ReportViewProps {
 /** The report: the one view of it that web viewer, offline file and print share. */
 export function ReportView({ report, identity, renderAside, current, onSelect }: ReportViewProps) {
   const blocks = useMemo(() => blocksByPath(report), [report]);
-  const shared = useMemo<SharedParts>(() => ({ blocks, renderAside }), [blocks, renderAside]);
+  const shared = useMemo<SharedParts>(
+    () => ({ blocks, axes: report.axes, quantities: report.quantities, renderAside }),
+    [blocks, report, renderAside],
+  );
   const select = (event: SyntheticEvent) => {
     const path = pathAt(event.target);
     if (path !== null && path !== current) onSelect?.(path);

@@ -1,10 +1,14 @@
-import type { AssumptionBlock, Block, InputBlock, ReportSection } from '../../core/report/model.ts';
+import type { Block, InputBlock, ReportSection, StatementBlock } from '../../core/report/model.ts';
 import { blockId } from './block-id.ts';
+import { LookupView, TakenView } from './basis-views.tsx';
 import { CheckView } from './check-view.tsx';
+import { ConditionsTable } from './conditions-table.tsx';
+import { FigureView } from './figure-view.tsx';
 import { Frame } from './frame.tsx';
 import { GasView } from './gas-view.tsx';
 import { InputsTable } from './inputs-table.tsx';
 import { Prose } from './prose.tsx';
+import { ResultTable } from './result-table.tsx';
 import type { SharedParts } from './shared.ts';
 import { StepView } from './step-view.tsx';
 
@@ -35,9 +39,11 @@ export function SectionView({ section, current, shared }: SectionViewProps) {
         )}
         {section.title}
       </h2>
-      {inRuns(section.blocks).map((run) => (
-        <BlockRun key={run[0]?.path} run={run} current={current} shared={shared} />
-      ))}
+      {section.path === 'conditions' ? (
+        <ConditionsTable blocks={section.blocks} current={current} shared={shared} />
+      ) : (
+        inRuns(section.blocks).map((run) => <BlockRun key={run[0]?.path} run={run} current={current} shared={shared} />)
+      )}
     </section>
   );
 }
@@ -62,20 +68,25 @@ interface BlockRunProps {
 function BlockRun({ run, current, shared }: BlockRunProps) {
   const inputs = run.filter((block): block is InputBlock => block.block === 'input');
   if (inputs.length > 0) return <InputsTable blocks={inputs} current={current} shared={shared} />;
-  const assumptions = run.filter((block): block is AssumptionBlock => block.block === 'assumption');
-  if (assumptions.length > 0) return <Assumptions blocks={assumptions} current={current} shared={shared} />;
+  const statements = run.filter(isStatement);
+  if (statements.length > 0) return <Statements blocks={statements} current={current} shared={shared} />;
   return run.map((block) => (
     <OneBlock key={block.path} block={block} isCurrent={block.path === current} shared={shared} />
   ));
 }
 
-interface AssumptionsProps {
-  readonly blocks: readonly AssumptionBlock[];
+function isStatement(block: Block): block is StatementBlock {
+  return block.block === 'assumption' || block.block === 'exclusion' || block.block === 'reference';
+}
+
+interface StatementsProps {
+  readonly blocks: readonly StatementBlock[];
   readonly current: string | undefined;
   readonly shared: SharedParts;
 }
 
-function Assumptions({ blocks, current, shared }: AssumptionsProps) {
+/** Assumptions, exclusions or references: one statement each, numbered. */
+function Statements({ blocks, current, shared }: StatementsProps) {
   return (
     <ol className="an-assumptions">
       {blocks.map((block) => (
@@ -109,8 +120,19 @@ function OneBlock({ block, isCurrent, shared }: OneBlockProps) {
           <Prose text={block.markdown} />
         </Frame>
       );
+    case 'taken':
+      return <TakenView block={block} isCurrent={isCurrent} shared={shared} />;
+    case 'lookup':
+      return <LookupView block={block} isCurrent={isCurrent} shared={shared} />;
+    case 'table':
+      return <ResultTable block={block} isCurrent={isCurrent} shared={shared} />;
+    case 'figure':
+      return <FigureView block={block} isCurrent={isCurrent} shared={shared} />;
     case 'input':
+    case 'column':
     case 'assumption':
-      return null; // set as a table and a list above
+    case 'exclusion':
+    case 'reference':
+      return null; // set as tables and lists above
   }
 }

@@ -2,8 +2,10 @@ import { memo } from 'react';
 import type { StepBlock } from '../../core/report/model.ts';
 import { Frame } from './frame.tsx';
 import type { BlockProps } from './shared.ts';
+import { Expected, Spread } from './spread.tsx';
 import { Tex } from './tex.tsx';
 import { Trace } from './trace.tsx';
+import { WholeTable } from './whole-table.tsx';
 
 /** An equals sign after which no line breaks: a link is broken before it. */
 const EQUALS = '{=}\\;';
@@ -11,6 +13,7 @@ const EQUALS = '{=}\\;';
 /** A step: what it is and where it comes from, then symbol = formula = numbers = result. */
 export const StepView = memo(function StepView({ block, isCurrent, shared }: BlockProps<StepBlock>) {
   const source = stepSource(block);
+  const quantity = shared.quantities[block.name];
   return (
     <Frame block={block} isCurrent={isCurrent} shared={shared} className="an-step">
       <div className="an-step-head">
@@ -19,7 +22,14 @@ export const StepView = memo(function StepView({ block, isCurrent, shared }: Blo
         {source !== '' && <span className="an-source">{source}</span>}
       </div>
       <StepLine block={block} />
+      {block.extent !== undefined && <Spread extent={block.extent} />}
+      {block.expect !== undefined && (
+        <p className="an-spread">
+          <Expected expect={block.expect} />
+        </p>
+      )}
       {block.note !== undefined && <p className="an-note">{block.note}</p>}
+      {quantity !== undefined && <WholeTable quantity={quantity} />}
       <Trace block={block} blocks={shared.blocks} />
     </Frame>
   );
@@ -30,14 +40,31 @@ export const StepView = memo(function StepView({ block, isCurrent, shared }: Blo
  * parts can differ in ink; links that would only repeat their neighbour are left out.
  */
 function StepLine({ block }: { readonly block: StepBlock }) {
-  const { symbol, formula, substituted, printed } = block;
+  const { symbol, formula, substituted, printed, at } = block;
+  const isOne = at === undefined;
   return (
-    <div className="an-equation">
-      <Tex tex={`\\displaystyle ${symbol} = ${formula}`} className="an-link" />
-      {substituted !== formula && substituted !== printed.tex && (
-        <Tex tex={`\\displaystyle ${EQUALS}${substituted}`} className="an-link an-substituted" />
-      )}
-      {formula !== printed.tex && <Tex tex={`${EQUALS}${printed.tex}`} className="an-link an-result" />}
+    <>
+      <div className="an-equation">
+        <Tex tex={`\\displaystyle ${symbol} = ${formula}`} className="an-link" />
+        {isOne && substituted !== formula && substituted !== printed.tex && (
+          <Tex tex={`\\displaystyle ${EQUALS}${substituted}`} className="an-link an-substituted" />
+        )}
+        {formula !== printed.tex && <Tex tex={`${EQUALS}${printed.tex}`} className="an-link an-result" />}
+      </div>
+      {!isOne && substituted !== formula && <CaseLine block={block} at={at} />}
+    </>
+  );
+}
+
+/** Of several cases, one with its numbers put in: the one of the largest magnitude. */
+function CaseLine({ block, at }: { readonly block: StepBlock; readonly at: string }) {
+  const { symbol, substituted, extent } = block;
+  const value = [extent?.greatest, extent?.least].find((extreme) => extreme?.at === at);
+  return (
+    <div className="an-equation an-case">
+      <span className="an-case-word">at {at}</span>
+      <Tex tex={`\\displaystyle ${symbol} = ${substituted}`} className="an-link an-substituted" />
+      {value !== undefined && <Tex tex={`${EQUALS}${value.printed.tex}`} className="an-link an-substituted" />}
     </div>
   );
 }

@@ -10,7 +10,7 @@ export interface TraceNode {
 
 /** The blocks that a block reads directly. */
 export function usesOf(block: Block): readonly string[] {
-  return block.block === 'step' || block.block === 'check' ? block.uses : [];
+  return 'uses' in block ? block.uses : [];
 }
 
 /**

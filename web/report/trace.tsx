@@ -72,9 +72,12 @@ function TraceLine({ node: { block, isRepeated } }: { readonly node: TraceNode }
   );
 }
 
+const WORDS: Readonly<Record<string, string>> = { lookup: 'table', column: 'conditions' };
+
 function TraceValue({ block }: { readonly block: Block }) {
   if (block.block === 'check') return <StandingWord standing={block.standing} />;
-  if (block.block !== 'input' && block.block !== 'step') return block.block;
+  if (block.block !== 'input' && block.block !== 'step' && block.block !== 'taken')
+    return WORDS[block.block] ?? block.block;
   return (
     <>
       <Tex tex={block.symbol} /> = <PrintedValue printed={block.printed} />
@@ -83,11 +86,12 @@ function TraceValue({ block }: { readonly block: Block }) {
 }
 
 function Origin({ block }: { readonly block: Block }) {
-  const isHeld = block.block === 'input' && block.hold !== undefined;
+  const isHeld = 'hold' in block && block.hold !== undefined;
   return (
     <>
       {isHeld && <HoldWord />}
       {block.source !== undefined && <span className="an-trace-source">{block.source}</span>}
+      {block.block === 'taken' && <span className="an-trace-source">{block.from}</span>}
       {block.block === 'step' && block.source === undefined && <code>{block.calc}</code>}
     </>
   );
