@@ -35,7 +35,7 @@ function readLookup(node: LookupNode, site: Site): { lookup?: EvaluatedLookup; d
     });
     return { diagnostics: [fault] };
   }
-  return { lookup: { node, table: { name: node.name.text, x, y } }, diagnostics };
+  return { lookup: { node, table: { name: node.name.text, x, y, site } }, diagnostics };
 }
 
 function readColumn(

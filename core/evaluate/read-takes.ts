@@ -8,7 +8,7 @@ import { LOCK_FILE } from '../sheet/file-names.ts';
 import { toSi } from '../units/convert.ts';
 import { inSystem } from '../units/display.ts';
 import { parseUnit } from '../units/parse-unit.ts';
-import { NO_SITE } from '../units/site.ts';
+import { missingFromSite, NO_SITE } from '../units/site.ts';
 import { typeOfUnit } from '../units/unit.ts';
 import { readLock, type LockedQuantity, type LockedRevision } from './lock.ts';
 
@@ -141,7 +141,8 @@ class TakeReader {
 function axisOf(name: AxisName, values: readonly (string | number)[], unitText: string | undefined): Axis | null {
   if (values.every((value) => typeof value === 'string')) return { name, ids: values };
   const unit = parseUnit(unitText ?? '1');
-  if (unit === null || !values.every((value) => typeof value === 'number')) return null;
+  if (unit === null || missingFromSite(unit, NO_SITE) !== null) return null;
+  if (!values.every((value) => typeof value === 'number')) return null;
   const coordinates = Float64Array.from(values, (value) => toSi(value, unit, NO_SITE));
   return { name, coordinates, type: typeOfUnit(unit), unit };
 }

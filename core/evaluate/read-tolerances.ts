@@ -4,7 +4,7 @@ import { nearest } from '../diagnostics/nearest.ts';
 import type { GasModel } from '../gas/gas-model.ts';
 import type { EvaluatedGas, Value } from '../report/evaluated-sheet.ts';
 import type { GasNode, InputNode, SheetDocument, Text } from '../sheet/document.ts';
-import { fromSi, toSi } from '../units/convert.ts';
+import { fromSi } from '../units/convert.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { describeType, isNumber, sameDimension } from '../units/dimensions.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
@@ -158,7 +158,7 @@ function shareTolerance(node: GasNode, share: GasNode['tolerance'][number], mode
   }
   const { value: read, diagnostics } = parseQuantity(amount.text.replace(SIGN, ''), amount.span);
   if (read === undefined) return { diagnostics };
-  const width = toSi(read.number, read.unit, {});
+  const width = read.number * read.unit.factor;
   if (!isNumber(read.unit.dimension) || width < 0)
     return fault('UNIT_MISMATCH', amount, 'a share in mole percent is wanted', ['such as `1.5 %`']);
   const [low, high] = [fraction - width, fraction + width];

@@ -1,4 +1,5 @@
 import type { QuantityType } from '../units/dimension.ts';
+import type { Site } from '../units/site.ts';
 import type { Unit } from '../units/unit.ts';
 
 /** One side of a table: its values in SI, what they are, and the unit in which messages name them. */
@@ -13,6 +14,8 @@ export interface LookupTable {
   readonly name: string;
   readonly x: TableColumn;
   readonly y: TableColumn;
+  /** What the units of its columns rest on. */
+  readonly site: Site;
 }
 
 /** Straight line between the two points around `at`; NaN outside of the table, which never reaches beyond its ends. */

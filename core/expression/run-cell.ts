@@ -2,7 +2,6 @@ import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import type { GasModel } from '../gas/gas-model.ts';
 import { fromSi } from '../units/convert.ts';
 import { printNumber } from '../units/print.ts';
-import { NO_SITE } from '../units/site.ts';
 import { arithmetic } from './arithmetic.ts';
 import { compareNumbers } from './compare-numbers.ts';
 import { interpolateIn } from './lookup-table.ts';
@@ -123,7 +122,7 @@ function interpolate({ from, table, span }: InterpolateInstruction, { registers,
   if (!Number.isNaN(y) || Number.isNaN(x)) return y;
   const { unit, values } = table.x;
   const shown = (si: number): string =>
-    `${printNumber(fromSi(si, unit, NO_SITE))}${unit.text === '1' ? '' : ` ${unit.text}`}`;
+    `${printNumber(fromSi(si, unit, table.site))}${unit.text === '1' ? '' : ` ${unit.text}`}`;
   diagnostics.push(
     error('LOOKUP_MISSING', span, `the table \`${table.name}\` does not reach ${shown(x)}`, {
       hints: [`it runs from ${shown(values[0] ?? 0)} to ${shown(values.at(-1) ?? 0)}, and is not extended beyond`],

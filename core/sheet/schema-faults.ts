@@ -86,11 +86,14 @@ function describe(fault: ErrorObject, root: Entry, schema: SchemaNode): Diagnost
 function unknownKey(key: string, { entry, schema, name }: Found): Diagnostic {
   const known = Object.keys(schema.properties ?? {});
   const near = nearest(key, known, 2);
-  const hint = LATER.includes(key)
-    ? `\`${key}\` is not offered in this version`
-    : near.length > 0
-      ? `did you mean \`${near.join('`, `')}\`?`
-      : `known here: ${known.join(', ')}`;
+  // A comma inside braces begins the next key: the rest of a formula without quotes is taken for one.
+  const hint = key.includes(')')
+    ? 'a comma ends a value in braces: put a formula with commas between quotation marks'
+    : LATER.includes(key)
+      ? `\`${key}\` is not offered in this version`
+      : near.length > 0
+        ? `did you mean \`${near.join('`, `')}\`?`
+        : `known here: ${known.join(', ')}`;
   const where = name === '' ? 'a sheet' : `\`${name}\``;
   return error(
     'SCHEMA_UNKNOWN_KEY',

@@ -13,14 +13,22 @@ async function diagnosticsOf(sheet: string): Promise<readonly LocatedDiagnostic[
 }
 
 describe('new study', () => {
-  it('makes a folder with a sheet that runs without a complaint', async () => {
+  it('makes a folder with sheets that run without a complaint', async () => {
     const made = await cli(['new', 'study', 'compressor-study']);
-    const sheet = join('compressor-study', 'shaking-force.yaml');
-    expect(made).toEqual({ status: 0, out: `${sheet}\n`, err: `Next: antinode run ${sheet}\n` });
-    expect(await diagnosticsOf(sheet)).toEqual([]);
-    const ran = await cli(['run', sheet]);
-    expect(ran).toMatchObject({ status: 0, err: '' });
-    expect(ran.out).toContain('2 checks pass');
+    const files = ['shaking-force.yaml', 'operating-range.yaml', 'basis.yaml', 'conditions.csv'];
+    const paths = files.map((file) => join('compressor-study', file));
+    const [sheet = '', range = ''] = paths;
+    expect(made).toEqual({
+      status: 0,
+      out: paths.map((path) => `${path}\n`).join(''),
+      err: `Next: antinode run ${sheet}, then antinode run ${range}\n`,
+    });
+    for (const path of [sheet, range]) {
+      expect(await diagnosticsOf(path)).toEqual([]);
+      const ran = await cli(['run', path]);
+      expect(ran).toMatchObject({ status: 0, err: '' });
+      expect(ran.out).toContain('2 checks pass');
+    }
   });
 
   it('takes an empty folder that is there', async () => {
@@ -98,9 +106,12 @@ describe('help', () => {
     ['new', 'sheet'],
     ['lint'],
     ['run'],
+    ['explain'],
+    ['compare'],
     ['verify'],
     ['functions'],
     ['units'],
+    ['completion'],
     ['login'],
     ['logout'],
     ['whoami'],

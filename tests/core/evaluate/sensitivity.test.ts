@@ -120,6 +120,13 @@ describe('tolerances that fit nothing', () => {
     expect(diagnostics.map((diagnostic) => diagnostic.code)).toEqual([code]);
   });
 
+  it.each(['3 psig', '3 MSCFD', '3 ft'])('of a share in %s', (amount) => {
+    const text = sheetOf(
+      `gases: { g: { method: ideal, fractions: { methane: 100 % }, tolerance: { methane: ${amount} } } }`,
+    );
+    expect(evaluateText(text).diagnostics).toMatchObject([{ code: 'UNIT_MISMATCH', line: 7 }]);
+  });
+
   it('of a component that the gas has not', () => {
     const text = sheetOf('gases: { g: { method: ideal, fractions: { methane: 100 % }, tolerance: { ethane: 1 % } } }');
     expect(places(evaluateText(text))).toEqual(['GAS_COMPONENT 7:74']);

@@ -48,8 +48,8 @@ describe('tables of results', () => {
         { name: 'L', unit: 'in' },
       ],
       rows: [
-        { at: 'C1', cells: ['1.000', '3.000', '12.00'] },
-        { at: 'C2', cells: ['2.000', '6.000', '12.00'] },
+        { at: 'C1', cells: ['1', '3.000', '12'] },
+        { at: 'C2', cells: ['2', '6.000', '12'] },
       ],
     });
   });
@@ -120,6 +120,16 @@ describe('tables of the sheet', () => {
     const { diagnostics } = evaluateText(SHEET(`  - { title: T, steps: { z: "${calc}" } }`));
     expect(diagnostics.map((diagnostic) => diagnostic.code)).toEqual([code]);
     expect(diagnostics[0]?.hints.join()).toContain(hint);
+  });
+
+  it('may be in gauge pressures, and say so where they end', () => {
+    const text = sheetOf(
+      'tables: { k: { columns: { p: psig, y: mm }, rows: [[1, 2], [3, 4]], source: b } }',
+      'sections: [{ title: S, steps: { a: "interpolate(k, 9 psig)" } }]',
+    );
+    expect(evaluateText(text).diagnostics).toMatchObject([
+      { code: 'LOOKUP_MISSING', message: 'the table `k` does not reach 9.000 psig' },
+    ]);
   });
 
   it('must rise', () => {
