@@ -3,6 +3,7 @@ import { CORE_VERSION } from '../core/version.ts';
 import { evaluatingCommands } from './evaluating-commands.ts';
 import { SHELLS, type Shell } from './completion/shells.ts';
 import type { LintOptions } from './commands/lint.ts';
+import type { PullOptions } from './commands/pull.ts';
 import { CommandFailure, EXIT, type ExitStatus } from './exit-status.ts';
 import { harmlessText } from './output/harmless.ts';
 import { jsonFormat } from './options.ts';
@@ -210,6 +211,22 @@ function serverCommands(program: Command, execute: Execute): void {
     .addHelpText('before', 'Example:\n  antinode push sheet.yaml --study th-3\n')
     .action((file: string, options: { study?: string; format: 'text' | 'json' }) =>
       execute(async (at) => (await import('./commands/push.ts')).push(file, options, at)),
+    );
+  program
+    .command('pull')
+    .argument('[revision]', 'document number and revision, such as TH3-C-102@B')
+    .option('--all <sheet>', 'fetch every revision that a sheet takes values from')
+    .option('--study <study>', 'study that the revision is of; needed where you are in several')
+    .option('--lock <dir>', 'folder of the lock file', '.')
+    .option('--files <dir>', 'write its files and its report there as well')
+    .description('fetch the values of a revision, for a sheet to take, into the lock file beside it')
+    .addOption(jsonFormat())
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode pull TH3-C-102@B\n  antinode pull TH3-C-102@B --files th3-c-102-b\n  antinode pull --all sheet.yaml\n',
+    )
+    .action((revision: string | undefined, options: PullOptions) =>
+      execute(async (at) => (await import('./commands/pull.ts')).pull(revision, options, at)),
     );
   program
     .command('status')

@@ -19,6 +19,7 @@
  *   POST   /api/studies/:study/sheets               Push                  → RevisionSummary (201)
  *   GET    /api/studies/:study/sheets/:number                             → RevisionSummary[] (newest first)
  *   GET    /api/studies/:study/sheets/:number/:revision                   → RevisionDetail
+ *   GET    …/:revision/values                                             → RevisionValues
  *   POST   …/:revision/transitions                  Transition            → RevisionDetail
  *   PUT    …/:revision/marks                        MarkRequest           → Mark
  *   DELETE …/:revision/marks?path=…                                       → 204
@@ -31,7 +32,7 @@
  * Browser sessions: an httpOnly SameSite=Lax cookie; every request that changes something carries the header
  * `X-CSRF-Token` with the value of Session.csrf. Tokens: `Authorization: Bearer …`, no CSRF header.
  */
-import type { LocatedDiagnostic, Report } from '../core/report/model.ts';
+import type { LocatedDiagnostic, Quantity, Report } from '../core/report/model.ts';
 
 export type Role = 'engineer' | 'checker' | 'approver' | 'reader';
 export type State = 'pushed' | 'in check' | 'checked' | 'approved' | 'returned';
@@ -209,6 +210,17 @@ export interface Signature {
   readonly time: string;
   readonly meaning: string;
   readonly kid: string;
+}
+
+/** The values of a revision, for other sheets to take; `antinode pull` puts them into the lock file beside a sheet. */
+export interface RevisionValues {
+  readonly number: string;
+  readonly revision: string;
+  readonly state: State;
+  readonly manifestDigest: string;
+  /** The latest approved revision behind this one; null where there is none. */
+  readonly newest: string | null;
+  readonly quantities: Readonly<Record<string, Pick<Quantity, 'unit' | 'si' | 'axes'>>>;
 }
 
 export interface RevisionDetail {

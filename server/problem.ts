@@ -16,6 +16,8 @@ const REFUSALS = {
   'holds-open': [409, 'Holds are open'],
   'blocks-unmarked': [409, 'Blocks are not marked'],
   'must-fix-open': [409, 'Must-fix remarks are not resolved'],
+  'taken-unknown': [409, 'A value is taken from a revision that is not here'],
+  'taken-differs': [409, 'A taken value is not the one on record'],
   unchanged: [409, 'Nothing has changed'],
   'digest-differs': [409, 'The block has another digest'],
   'not-approved': [409, 'The revision is not approved'],

@@ -29,6 +29,14 @@ export async function requireApi<T>(call: ApiCall): Promise<T> {
   throw refusalFailure(answer.status, answer.problem);
 }
 
+/** As {@link requireApi}, for what is no JSON. */
+export async function requireText(call: ApiCall): Promise<string> {
+  const response = await send(call);
+  const text = await response.text();
+  if (response.ok) return text;
+  throw refusalFailure(response.status, parse(text) ?? { detail: text.slice(0, 200) });
+}
+
 export function refusalFailure(status: number, problem: Partial<Problem>): CommandFailure {
   const { title = `the server answered ${status}`, detail, code, request } = problem;
   const hints = HINTS[code ?? ''] ?? (status >= 500 && request !== undefined ? [`request id ${request}`] : []);

@@ -13,6 +13,7 @@ import type { Context } from '../services/context.ts';
 import { putMark, removeMark } from '../services/marks.ts';
 import { revisionDetail, sourceText } from '../services/read-revision.ts';
 import { changeRemark, raiseRemark, replyToRemark } from '../services/remarks.ts';
+import { revisionValues } from '../services/takes.ts';
 import { moveRevision } from '../services/transitions.ts';
 import type { Response } from 'express';
 
@@ -34,6 +35,10 @@ export function revisionRoutes(context: Context): Router {
     const { number, revision } = request.params;
     const text = await bundleOf(context, personIn(response), request.params);
     response.attachment(`${number}-${revision}.bundle.json`).type('application/json').send(text);
+  });
+
+  router.get(`${REVISION}/values`, async (request, response) => {
+    response.json(await revisionValues(context, personIn(response), request.params));
   });
 
   router.get(`${REVISION}/files/:name`, async (request, response) => {

@@ -4,7 +4,7 @@ import type { Report } from '../../core/report/model.ts';
 import { canonicalJson } from '../../core/seal/canonical-json.ts';
 import { digestText } from '../../core/seal/digest.ts';
 import { buildManifest } from '../../core/seal/manifest.ts';
-import type { SourceFile } from '../../core/seal/model.ts';
+import type { Manifest, SourceFile } from '../../core/seal/model.ts';
 import type { Person, Push, RevisionSummary } from '../../schemas/api.ts';
 import type { Database } from '../db/database.ts';
 import { blobs } from '../db/schema/blobs.ts';
@@ -17,6 +17,7 @@ import { revisionLetter } from './letters.ts';
 import { membershipIn, requireRole } from './members.ts';
 import { checkFiles, checkNumber } from './push-names.ts';
 import { fileList } from './read-revision.ts';
+import { requireTaken } from './takes.ts';
 import { count, summaryOf } from './review.ts';
 import { blocksOf, revisionIn, sheetRecord, type RevisionRow } from './sheet-record.ts';
 
@@ -35,8 +36,9 @@ export async function pushSheet(context: Context, person: Person, study: string,
     const sheetId = await sheetOf(tx, study, report.sheet.number, now());
     const former = await newestOf(tx, sheetId);
     if (former) await refuseUnchanged(tx, former, files);
+    const taken = await requireTaken(tx, study, report);
     const place = await nextPlace(tx, now());
-    const pushed: NewRevision = { study, sheetId, person, files, report, former, time: place.time };
+    const pushed: NewRevision = { study, sheetId, person, files, report, taken, former, time: place.time };
     const revision = await writeRevision(tx, pushed);
     await recordPush(tx, pushed, revision, place);
     const record = await sheetRecord(tx, study, report.sheet.number);
@@ -96,6 +98,7 @@ interface NewRevision {
   readonly person: Person;
   readonly files: readonly SourceFile[];
   readonly report: Report;
+  readonly taken: Manifest['taken'];
   readonly former: RevisionRow | undefined;
   readonly time: Date;
 }
@@ -107,11 +110,11 @@ interface WrittenRevision {
 }
 
 async function writeRevision(tx: Database, pushed: NewRevision): Promise<WrittenRevision> {
-  const { study, sheetId, person, files, report, former, time } = pushed;
+  const { study, sheetId, person, files, report, taken, former, time } = pushed;
   const ordinal = (former?.ordinal ?? 0) + 1;
   const letter = revisionLetter(ordinal);
   const previous = former?.manifestDigest ?? null;
-  const manifest = canonicalJson(buildManifest({ study, revision: letter, files, report, taken: [], previous }));
+  const manifest = canonicalJson(buildManifest({ study, revision: letter, files, report, taken, previous }));
   const reportText = canonicalJson(report);
   const row = {
     id: randomUUID(),

@@ -54,9 +54,13 @@ export async function markAll(by: Client, at: string): Promise<void> {
 }
 
 /** Brings a sheet all the way to approval, and gives its bundle. */
-export async function approvedBundle({ author, checker, approver }: Cast, parts: SheetParts): Promise<string> {
-  const pushed = await author.call('POST', STUDY, pushOf(sheetText(parts)));
-  const at = `${String(pushed.body['number'])}/${String(pushed.body['revision'])}`;
+export async function approvedBundle(cast: Cast, parts: SheetParts): Promise<string> {
+  const pushed = await cast.author.call('POST', STUDY, pushOf(sheetText(parts)));
+  return approved(cast, `${String(pushed.body['number'])}/${String(pushed.body['revision'])}`);
+}
+
+/** Brings a pushed revision to approval, and gives its bundle. */
+export async function approved({ author, checker, approver }: Cast, at: string): Promise<string> {
   await move(author, at, 'hand over');
   await markAll(checker, at);
   await move(checker, at, 'close check');

@@ -116,6 +116,7 @@ describe('help', () => {
     ['logout'],
     ['whoami'],
     ['push'],
+    ['pull'],
     ['status'],
     ['serve'],
   ].map((words) => words.join(' '));
