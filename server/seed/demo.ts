@@ -1,6 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { join } from 'node:path';
-import type { NewRemark, Person, Role } from '../../schemas/api.ts';
+import type { NewRemark, Person, RevisionSummary, Role } from '../../schemas/api.ts';
 import { people } from '../db/schema/people.ts';
 import { PACKAGE_ROOT } from '../places.ts';
 import type { Context } from '../services/context.ts';
@@ -14,6 +14,8 @@ import { moveRevision } from '../services/transitions.ts';
 export const DEMO_PASSWORD = 'antinode-demo';
 const STUDY = { id: 'th-3', title: 'Tarn Hollow Station, unit TH-3', place: 'Tarn Hollow, Upper Fell' };
 const SHEET = 'discharge-run-force.yaml';
+/** A second sheet, with the files that it uses: pushed, and not handed over yet. */
+const RANGE_SHEET = ['discharge-run-range.yaml', 'basis.yaml', 'conditions.csv'];
 
 export interface DemoPerson {
   readonly name: string;
@@ -53,18 +55,36 @@ export async function seedDemo(context: Context): Promise<readonly DemoPerson[]>
     created.set(role, person);
   }
   const [author, checker] = [created.get('engineer'), created.get('checker')];
-  if (author !== undefined && checker !== undefined) await pushExample(context, author, checker);
+  if (author !== undefined && checker !== undefined) await pushExamples(context, author, checker);
   return PEOPLE;
 }
 
-async function pushExample(context: Context, author: Person, checker: Person): Promise<void> {
-  const text = await readFile(join(PACKAGE_ROOT, 'examples/tarn-hollow', SHEET), 'utf8').catch(() => null);
-  if (text === null) return;
-  const files = [{ name: SHEET, text }];
-  const { report } = await context.pool.evaluate({ entry: SHEET, files });
-  if (report === null) throw new Error('the example sheet does not evaluate');
-  const { number, revision } = await pushSheet(context, author, STUDY.id, { entry: SHEET, files, report });
+async function pushExamples(context: Context, author: Person, checker: Person): Promise<void> {
+  const first = await pushExample(context, author, [SHEET]);
+  await pushExample(context, author, RANGE_SHEET);
+  if (first === null) return;
+  const { number, revision } = first;
   const ref = { study: STUDY.id, number, revision };
   await moveRevision(context, author, ref, { move: 'hand over', note: '', password: DEMO_PASSWORD });
   for (const remark of REMARKS) await raiseRemark(context, checker, ref, remark);
+}
+
+/** Pushes a sheet of the examples with the files beside it; nothing where the package carries no examples. */
+async function pushExample(
+  context: Context,
+  author: Person,
+  names: readonly string[],
+): Promise<RevisionSummary | null> {
+  const texts = await Promise.all(
+    names.map((name) => readFile(join(PACKAGE_ROOT, 'examples/tarn-hollow', name), 'utf8').catch(() => null)),
+  );
+  const files = names.flatMap((name, i) => {
+    const text = texts[i];
+    return typeof text === 'string' ? [{ name, text }] : [];
+  });
+  const [sheet] = files;
+  if (sheet === undefined || files.length < names.length) return null;
+  const { report } = await context.pool.evaluate({ entry: sheet.name, files });
+  if (report === null) throw new Error(`the example ${sheet.name} does not evaluate`);
+  return pushSheet(context, author, STUDY.id, { entry: sheet.name, files, report });
 }

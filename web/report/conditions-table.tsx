@@ -85,12 +85,17 @@ function Cell({ column, row, tail }: { readonly column: Column; readonly row: nu
   return column.block === 'column' ? cell : <AlignedNumber number={cell} tail={tail} />;
 }
 
+/** The name in formulas, where the label does not say it already. */
+function ColumnName({ column: { name, label } }: { readonly column: ColumnBlock }) {
+  return name.toLowerCase() === label.toLowerCase() ? null : <em>{name}</em>;
+}
+
 /** What a column is and where it comes from: its head has room for a symbol only. */
 function LegendLine({ column, shared }: { readonly column: Column; readonly shared: SharedParts }) {
   return (
     <li>
       <Aside block={column} shared={shared} />
-      {column.block === 'input' ? <Tex tex={column.symbol} /> : <em>{column.name}</em>} {column.label}
+      {column.block === 'input' ? <Tex tex={column.symbol} /> : <ColumnName column={column} />} {column.label}
       <span className="an-source">
         {' · '}
         {column.hold !== undefined && (
