@@ -48,6 +48,7 @@ export const LAYERS = {
     'core/diagnostics',
     'core/library/function.ts',
     'core/gas/gas-model.ts',
+    'core/numeric',
     'core/seal/digest.ts',
     'core/version.ts',
   ],

@@ -1,3 +1,4 @@
+import { roundTo } from '../numeric/round.ts';
 import { fromSi } from '../units/convert.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { NO_SITE } from '../units/site.ts';
@@ -40,7 +41,7 @@ export function axisLength(axis: Axis): number {
 /** Name or value of a point, as JSON carries it: a value in the axis's unit, freed of the noise of the conversion. */
 export function axisPoint(axis: Axis, index: number): string | number {
   if ('ids' in axis) return axis.ids[index] ?? '';
-  return Number(fromSi(axis.coordinates[index] ?? Number.NaN, axis.unit, NO_SITE).toPrecision(12));
+  return roundTo(fromSi(axis.coordinates[index] ?? Number.NaN, axis.unit, NO_SITE), 12);
 }
 
 export function axisPoints(axis: Axis): readonly (string | number)[] {

@@ -18,6 +18,15 @@ export function locate(text: string, offset: number): Place {
   return placeIn(text, lineStarts(text), offset);
 }
 
+/** Line of a place, for many places: each file's lines are counted once. */
+export function lineFinder(textOf: TextOf): (at: Span) => number {
+  const files = fileCache(textOf);
+  return ({ file, start }) => {
+    const { text, starts } = files(file);
+    return placeIn(text, starts, start).line;
+  };
+}
+
 /** A diagnostic with its place as file, line and column. The place is 1:1 where the file's text is not known. */
 export function locateDiagnostic(diagnostic: Diagnostic, textOf: TextOf): LocatedDiagnostic {
   return locateWith(diagnostic, fileCache(textOf));
@@ -104,5 +113,9 @@ function placeIn(text: string, starts: readonly number[], offset: number): Place
     else high = middle - 1;
   }
   const hidden = low === 0 && text.startsWith(BYTE_ORDER_MARK) ? 1 : 0;
-  return { line: low + 1, column: Math.max(0, inside - (starts[low] ?? 0) - hidden) + 1 };
+  const start = (starts[low] ?? 0) + hidden;
+  // A place on the line end itself stands just behind the line's last character.
+  const next = starts[low + 1];
+  const end = next === undefined ? text.length : next - (text.charAt(next - 2) === '\r' ? 2 : 1);
+  return { line: low + 1, column: Math.max(0, Math.min(inside, end) - start) + 1 };
 }

@@ -1,6 +1,6 @@
 import type { Column } from '../axes/column.ts';
 import { hasErrors, type Diagnostic } from '../diagnostics/diagnostic.ts';
-import { locate, locateDiagnostic } from '../diagnostics/locate.ts';
+import { lineFinder, locateDiagnostics } from '../diagnostics/locate.ts';
 import { buildReport } from '../report/build-report.ts';
 import type { EvaluatedSheet } from '../report/evaluated-sheet.ts';
 import { assembleSheet } from './assemble-sheet.ts';
@@ -24,12 +24,10 @@ export function evaluateSheet(request: EvaluateRequest): Evaluation {
   const texts = requestTexts(request);
   const { prepared, diagnostics } = prepareSheet(request, texts);
   const outcome = prepared === null ? { sheet: null, diagnostics: [] } : evaluatePrepared(prepared, request);
-  const located = [...diagnostics, ...outcome.diagnostics].map((diagnostic) =>
-    locateDiagnostic(diagnostic, (file) => texts.get(file)),
-  );
+  const textOf = (file: string): string | undefined => texts.get(file);
+  const located = locateDiagnostics([...diagnostics, ...outcome.diagnostics], textOf);
   if (outcome.sheet === null) return { report: null, diagnostics: located };
-  const report = buildReport(outcome.sheet, ({ file, start }) => locate(texts.get(file) ?? '', start).line, located);
-  return { report, diagnostics: located };
+  return { report: buildReport(outcome.sheet, lineFinder(textOf), located), diagnostics: located };
 }
 
 interface Outcome {

@@ -47,11 +47,15 @@ export function readTakes(
   const diagnostics: Diagnostic[] = [];
   const taken = new Map<string, EvaluatedTake>();
   for (const node of take) {
+    // Of a text that names no revision, the schema has said so.
+    if (!REFERENCE.test(node.from.text)) continue;
     const found = new TakeReader(node, lock, axes, diagnostics).read(units);
     if (found !== undefined) taken.set(node.name.text, found);
   }
   return { taken, diagnostics };
 }
+
+const REFERENCE = /^\S+@\S+#\S+$/;
 
 class TakeReader {
   private readonly node: TakeNode;

@@ -1,5 +1,5 @@
 import { hasErrors } from '../diagnostics/diagnostic.ts';
-import { locateDiagnostic } from '../diagnostics/locate.ts';
+import { locateDiagnostics } from '../diagnostics/locate.ts';
 import type { LocatedDiagnostic } from '../diagnostics/located-diagnostic.ts';
 import { Arena } from '../expression/arena.ts';
 import type { GasModel } from '../gas/gas-model.ts';
@@ -83,7 +83,7 @@ export function evaluateSensitivity(request: EvaluateRequest): Sensitivity | nul
       },
     };
   });
-  return { checks, diagnostics: diagnostics.map((found) => locateDiagnostic(found, (file) => texts.get(file))) };
+  return { checks, diagnostics: locateDiagnostics(diagnostics, (file) => texts.get(file)) };
 }
 
 function effectOf(

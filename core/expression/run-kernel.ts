@@ -5,6 +5,7 @@ import type { GasModel } from '../gas/gas-model.ts';
 import type { Argument } from '../library/function.ts';
 import { BLOCK, type Arena, type Moving } from './arena.ts';
 import * as loops from './block-loops.ts';
+import * as functions from './function-loops.ts';
 import type { Findings } from './findings.ts';
 import { interpolateIn, type LookupTable } from './lookup-table.ts';
 import type { GasesArgument, Instruction, Kernel, LibraryInstruction, MathInstruction } from './program.ts';
@@ -159,7 +160,7 @@ class KernelRun {
   ): boolean {
     const r = registers[to]!;
     const operands = args.map((register) => registers[register]!);
-    const fast = loops.mathematics(fn.name, r, operands, n);
+    const fast = functions.mathematics(fn.name, r, operands, n);
     if (fast !== null) return fast;
     const values = args.map(() => 0);
     let odd = false;
@@ -247,8 +248,8 @@ function raise(r: Moving, base: Moving, exponents: Moving, exponent: number | un
       loops.square(r, base, n);
       return false;
     case 0.5:
-      return loops.squareRoot(r, base, n);
+      return functions.squareRoot(r, base, n);
     default:
-      return loops.raise(r, base, exponents, n);
+      return functions.raise(r, base, exponents, n);
   }
 }

@@ -1,4 +1,5 @@
 import type { LocatedDiagnostic } from '../diagnostics/located-diagnostic.ts';
+import { roundTo } from '../numeric/round.ts';
 import { digestJson } from '../seal/digest.ts';
 import { describeType } from '../units/dimensions.ts';
 import { fromSi } from '../units/convert.ts';
@@ -115,7 +116,7 @@ function quantity(
   return {
     value:
       (column.axes.length === 0 ? typed : undefined) ??
-      nested(column, axes, (si) => withoutNoise(fromSi(si, unit, site))),
+      nested(column, axes, (si) => roundTo(fromSi(si, unit, site), 15)),
     unit: unit.text,
     si: nested(column, axes, (si) => si),
     dimension: describeType(type),
@@ -128,11 +129,6 @@ function quantity(
     printed: block.printed,
     path: block.path,
   };
-}
-
-/** A conversion there and back leaves `1000.0000000000001` of 1000; no digit that means something is lost. */
-function withoutNoise(value: number): number {
-  return Number(value.toPrecision(15));
 }
 
 function checkResult({ path, that, label, status, utilisation, governing }: CheckBlock): CheckResult {

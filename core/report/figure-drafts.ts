@@ -4,6 +4,7 @@ import { cellText } from '../axes/points.ts';
 import { gatherIndex, sameShape, type Shape } from '../axes/shape.ts';
 import { expressionTex } from '../expression/tex.ts';
 import type { TableNode } from '../sheet/document.ts';
+import { roundTo } from '../numeric/round.ts';
 import { fromSi } from '../units/convert.ts';
 import { place, plainText, type Draft, type DraftContext } from './draft.ts';
 import { conditionNumber } from './condition-drafts.ts';
@@ -127,7 +128,7 @@ function spread(value: Value, shape: readonly AxisName[], context: DraftContext)
 }
 
 function numbers({ column, unit }: Value, cells: Iterable<number>, { sheet }: DraftContext): number[] {
-  return Array.from(cells, (cell) => Number(fromSi(column.data[cell] ?? Number.NaN, unit, sheet.site).toPrecision(9)));
+  return Array.from(cells, (cell) => roundTo(fromSi(column.data[cell] ?? Number.NaN, unit, sheet.site), 9));
 }
 
 export function tableDraft(path: string, node: TableNode, context: DraftContext): Draft {

@@ -15,7 +15,11 @@ export function printValue(value: Value, digits: number | undefined, context: Dr
 }
 
 export function printCell(value: Value, cell: number, digits: number | undefined, context: DraftContext): Printed {
-  return printQuantity(value.column.data[cell] ?? Number.NaN, value.unit, printOptions(digitsOf(value, digits), context));
+  return printQuantity(
+    value.column.data[cell] ?? Number.NaN,
+    value.unit,
+    printOptions(digitsOf(value, digits), context),
+  );
 }
 
 /** Orders and other whole numbers over an axis need no decimals. */

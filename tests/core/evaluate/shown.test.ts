@@ -82,7 +82,9 @@ describe('figures', () => {
   });
 
   it('draw a spectrum over the orders, whichever axis is the inner one', () => {
-    expect(figure('{ kind: spectrum, unit: mm, of: \'harmonics(2)*1 mm*at(N, "speed", 2 rpm)/(2 rpm)\' }')).toMatchObject({
+    expect(
+      figure('{ kind: spectrum, unit: mm, of: \'harmonics(2)*1 mm*at(N, "speed", 2 rpm)/(2 rpm)\' }'),
+    ).toMatchObject({
       x: { name: 'harmonic', values: [1, 2] },
       series: [{ label: '', values: [1, 2] }],
     });
