@@ -78,7 +78,7 @@ describe('what cannot be taken', () => {
       '',
     ],
   ])('%s', (_, beside, hint) => {
-    const { report, diagnostics } = evaluateText(SHEET, {}, beside as Record<string, string>);
+    const { report, diagnostics } = evaluateText(SHEET, {}, beside);
     expect(report).toBeNull();
     expect(diagnostics[0]).toMatchObject({ severity: 'error', line: 7 });
     expect(diagnostics[0]?.hints.join()).toContain(hint);
