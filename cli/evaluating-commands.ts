@@ -16,6 +16,7 @@ export interface ExplainOptions extends EvaluateOptions {
 }
 
 export interface CompareOptions {
+  readonly study?: string;
   readonly units?: 'us' | 'si';
   readonly format: 'text' | 'json';
 }
@@ -53,12 +54,16 @@ export function evaluatingCommands(program: Command, execute: Execute): void {
 
   program
     .command('compare')
-    .argument('<before>', 'sheet')
-    .argument('<after>', 'sheet to hold against it')
+    .argument('<before>', 'sheet, or revision on the team server: TH3-C-104@A')
+    .argument('<after>', 'sheet or revision to hold against it')
     .description('what changed between two sheets: checks, inputs, formulas, results, text')
+    .option('--study <study>', 'study of a revision; needed where you are in several')
     .addOption(unitsOption())
     .addOption(jsonFormat())
-    .addHelpText('before', 'Example:\n  antinode compare sheet-rev-a.yaml sheet-rev-b.yaml\n')
+    .addHelpText(
+      'before',
+      'Examples:\n  antinode compare sheet-rev-a.yaml sheet-rev-b.yaml\n  antinode compare TH3-C-104@A sheet.yaml\n',
+    )
     .addHelpText('after', '\nExit status: 0 both evaluate, whatever changed; 2 one of them is wrong.')
     .action((before: string, after: string, options: CompareOptions) =>
       execute(async (at) => (await import('./commands/compare.ts')).compare(before, after, options, at)),

@@ -1,14 +1,16 @@
 import { mkdir, readdir, writeFile } from 'node:fs/promises';
 import { dirname, join, relative, resolve } from 'node:path';
 import { parseSheet } from '../../core/sheet/parse-sheet.ts';
-import type { RevisionDetail, RevisionValues, StudySummary } from '../../schemas/api.ts';
+import type { RevisionDetail, RevisionValues } from '../../schemas/api.ts';
 import { CommandFailure, EXIT, type ExitStatus } from '../exit-status.ts';
 import { lockRevisions } from '../files/lock-file.ts';
 import { readSource } from '../files/read-source.ts';
 import { harmlessText } from '../output/harmless.ts';
 import type { Invocation } from '../program.ts';
 import { requireApi, requireText } from '../remote/api.ts';
+import { referenceOf, revisionPath, type Reference } from '../remote/reference.ts';
 import { requireCredentials, type Credentials } from '../remote/credentials.ts';
+import { onlyStudy } from '../remote/only-study.ts';
 
 export interface PullOptions {
   readonly all?: string;
@@ -26,18 +28,13 @@ export async function pull(revision: string | undefined, options: PullOptions, a
   const study = options.study ?? (await onlyStudy(credentials));
   const values: RevisionValues[] = [];
   for (const reference of references) {
-    values.push(await requireApi<RevisionValues>({ ...credentials, path: `${pathOf(study, reference)}/values` }));
+    values.push(await requireApi<RevisionValues>({ ...credentials, path: `${revisionPath(study, reference)}/values` }));
   }
   const lock = relative(at.cwd, await lockRevisions(folder, values));
   const [only] = references;
   if (options.files !== undefined && only !== undefined) await writeFiles(only, study, options.files, credentials, at);
   at.streams.out(options.format === 'json' ? json(study, lock, values) : text(lock, values));
   return EXIT.done;
-}
-
-interface Reference {
-  readonly number: string;
-  readonly revision: string;
 }
 
 async function referencesOf(
@@ -55,15 +52,6 @@ async function referencesOf(
   return takenBy(all ?? '', at);
 }
 
-function referenceOf(text: string): Reference {
-  const at = text.lastIndexOf('@');
-  const [number, revision] = [text.slice(0, at), text.slice(at + 1).replace(/#.*$/, '')];
-  if (at > 0 && number !== '' && revision !== '') return { number, revision };
-  throw new CommandFailure(EXIT.usage, `\`${text}\` does not name a revision`, [
-    'write `NUMBER@REVISION`: `TH3-C-102@B`',
-  ]);
-}
-
 /** The revisions that a sheet takes values from, each once. */
 async function takenBy(file: string, at: Invocation): Promise<readonly Reference[]> {
   const source = await readSource(file, at);
@@ -72,22 +60,6 @@ async function takenBy(file: string, at: Invocation): Promise<readonly Reference
   const references = (sheet?.take ?? []).map(({ from }) => from.text.replace(/#.*$/, ''));
   if (references.length === 0) throw new CommandFailure(EXIT.usage, `\`${file}\` takes nothing from other sheets`);
   return [...new Set(references)].map(referenceOf);
-}
-
-/** The study of the person, where there is only one. */
-async function onlyStudy(credentials: Credentials): Promise<string> {
-  const studies = await requireApi<StudySummary[]>({ ...credentials, path: '/studies' });
-  const [only] = studies;
-  if (only !== undefined && studies.length === 1) return only.study;
-  throw new CommandFailure(
-    EXIT.usage,
-    only === undefined ? 'you are in no study' : 'you are in several studies',
-    studies.map(({ study, title }) => `--study ${study}  (${title})`),
-  );
-}
-
-function pathOf(study: string, { number, revision }: Reference): string {
-  return `/studies/${[study, 'sheets', number, revision].map(encodeURIComponent).join('/')}`;
 }
 
 /** Writes the source files and the report of a revision into a folder that holds nothing yet. */
@@ -102,11 +74,11 @@ async function writeFiles(
   await mkdir(path, { recursive: true });
   if ((await readdir(path)).length > 0)
     throw new CommandFailure(EXIT.usage, `the folder \`${folder}\` is not empty`, ['name a new folder']);
-  const { files, report } = await requireApi<RevisionDetail>({ ...credentials, path: pathOf(study, reference) });
+  const { files, report } = await requireApi<RevisionDetail>({ ...credentials, path: revisionPath(study, reference) });
   for (const name of files) {
     if (!isSaneName(name))
       throw new CommandFailure(EXIT.server, `the server names a file \`${harmlessText(name)}\`, which leads out`);
-    const call = { ...credentials, path: `${pathOf(study, reference)}/files/${encodeURIComponent(name)}` };
+    const call = { ...credentials, path: `${revisionPath(study, reference)}/files/${encodeURIComponent(name)}` };
     await mkdir(dirname(join(path, name)), { recursive: true });
     await writeFile(join(path, name), await requireText(call));
   }

@@ -1,13 +1,14 @@
 import { basename, dirname } from 'node:path';
 import { evaluateSheet } from '../../core/evaluate/evaluate-sheet.ts';
 import type { Report } from '../../core/report/model.ts';
-import type { Problem, Push, RevisionSummary, StudySummary } from '../../schemas/api.ts';
-import { CommandFailure, EXIT, type ExitStatus } from '../exit-status.ts';
+import type { Problem, Push, RevisionSummary } from '../../schemas/api.ts';
+import { EXIT, type ExitStatus } from '../exit-status.ts';
 import { readSheetFilesIn } from '../files/read-sheet-files.ts';
 import { count, diagnosticsText } from '../output/print-diagnostics.ts';
 import type { Invocation } from '../program.ts';
-import { callApi, refusalFailure, requireApi } from '../remote/api.ts';
+import { callApi, refusalFailure } from '../remote/api.ts';
 import { requireCredentials, type Credentials } from '../remote/credentials.ts';
+import { onlyStudy } from '../remote/only-study.ts';
 
 /** Evaluates the sheet here, and sends sources and report; the server evaluates again and compares. */
 export async function push(
@@ -25,7 +26,7 @@ export async function push(
   if (diagnostics.length > 0) at.streams.err(diagnosticsText(diagnostics, at.paintErr));
   if (report === null) return EXIT.sheetWrong;
   const credentials = await requireCredentials(at);
-  const study = options.study ?? (await onlyStudy(credentials));
+  const study = options.study ?? (await onlyStudy(credentials, 'engineer'));
   const revision = await send({ entry, files: [...files], report }, study, credentials, at);
   at.streams.out(
     options.format === 'json'
@@ -47,20 +48,6 @@ async function send(body: Push, study: string, credentials: Credentials, at: Inv
 function tellDifferences({ differences = [], diagnostics = [] }: Partial<Problem>, at: Invocation): void {
   if (diagnostics.length > 0) at.streams.err(diagnosticsText(diagnostics, at.paintErr));
   for (const { path, yours, ours } of differences) at.streams.err(`  ${path}: ${yours} here, ${ours} on the server\n`);
-}
-
-/** The study of the person, where there is only one in which sheets may be pushed. */
-async function onlyStudy(credentials: Credentials): Promise<string> {
-  const studies = await requireApi<StudySummary[]>({ ...credentials, path: '/studies' });
-  const mine = studies.filter(({ roles }) => roles.includes('engineer'));
-  const [only] = mine;
-  if (only !== undefined && mine.length === 1) return only.study;
-  const reason = mine.length === 0 ? 'you are an engineer of no study' : 'you are an engineer of several studies';
-  throw new CommandFailure(
-    EXIT.usage,
-    reason,
-    mine.map(({ study, title }) => `--study ${study}  (${title})`),
-  );
 }
 
 function tellNext(

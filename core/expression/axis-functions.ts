@@ -3,7 +3,9 @@ export type Reduction = 'max' | 'min' | 'mean' | 'sum' | 'envelope';
 
 /** What a call that speaks of axes does. */
 export type AxisRole =
-  { readonly does: 'reduce'; readonly how: Reduction } | { readonly does: 'pick' | 'choose' | 'interpolate' | 'count' };
+  | { readonly does: 'reduce'; readonly how: Reduction }
+  | { readonly does: 'count'; readonly axis: 'harmonic' | 'angle' }
+  | { readonly does: 'pick' | 'choose' | 'interpolate' };
 
 /** A function that works along axes rather than on single values. */
 export interface AxisFunction {
@@ -88,8 +90,19 @@ const LIST: readonly AxisFunction[] = [
     returns: 'whole numbers along the axis `harmonic`',
     validity: 'From 1 to 500; all of one sheet are equally many.',
     example: { call: 'harmonics(40)', result: '1, 2, 3, … 40' },
-    role: { does: 'count' },
+    role: { does: 'count', axis: 'harmonic' },
     tex: ([n = '']) => `(1\\ldots ${n})`,
+  },
+  {
+    name: 'angles',
+    topic: 'axes',
+    summary: 'Crank angles over one turn, in n equal steps from zero, as an axis',
+    parameters: [{ name: 'n', summary: 'how many, a whole number written out' }],
+    returns: 'angles along the axis `angle`',
+    validity: 'From 4 to 3600; all of one sheet are equally many.',
+    example: { call: 'angles(72)', result: '0, 5, 10, … 355 deg' },
+    role: { does: 'count', axis: 'angle' },
+    tex: ([n = '']) => `(0\\ldots 2\\pi)_{${n}}`,
   },
 ];
 

@@ -11,8 +11,9 @@ import {
 import { unionShapes, withoutAxes } from '../axes/shape.ts';
 import { nearest } from '../diagnostics/nearest.ts';
 import { toSi } from '../units/convert.ts';
-import { NUMBER, sameDimension, describeType } from '../units/dimensions.ts';
+import { sameDimension, describeType } from '../units/dimensions.ts';
 import { parseUnit } from '../units/parse-unit.ts';
+import { typeOfUnit } from '../units/unit.ts';
 import { addTypes, article, compareTypes } from '../units/type-algebra.ts';
 import { acceptType } from '../units/type-conversion.ts';
 import type { AxisFunction, Reduction } from './axis-functions.ts';
@@ -36,7 +37,7 @@ export function inferAxisCall(call: Call, fn: AxisFunction, inference: Inference
     case 'interpolate':
       return interpolate(call, inference);
     case 'count':
-      return count(call, inference);
+      return count(call, fn.role.axis, inference);
   }
 }
 
@@ -143,39 +144,42 @@ function interpolate(call: Call, inference: Inference): TypedCall | undefined {
   return { type: table.y.type, axes: operand.axes };
 }
 
-/** Orders of one sheet that any formula may count. */
-const MAX_ORDERS = 500;
+/** What may be counted: how many at least and at most, and the axis that many make. */
+const COUNTED = {
+  harmonic: { least: 1, most: 500, words: 'orders', unit: '1', at: (i: number) => i + 1 },
+  angle: { least: 4, most: 3600, words: 'angles', unit: 'deg', at: (i: number, n: number) => (2 * Math.PI * i) / n },
+} as const;
 
-function count(call: Call, inference: Inference): TypedCall | undefined {
+function count(call: Call, name: keyof typeof COUNTED, inference: Inference): TypedCall | undefined {
+  const { least, most, words, unit: unitText, at } = COUNTED[name];
   const [argument] = call.arguments;
   const n = argument && constantValue(argument);
-  if (argument === undefined || n === undefined || !Number.isInteger(n) || n < 1 || n > MAX_ORDERS) {
+  if (argument === undefined || n === undefined || !Number.isInteger(n) || n < least || n > most) {
     inference.report(
       'FUNCTION_ARGUMENTS',
       argument?.span ?? call.span,
-      `\`harmonics\` wants a whole number from 1 to ${MAX_ORDERS}, written out`,
-      ['its length must be known before anything is computed: `harmonics(40)`'],
+      `\`${call.function}\` wants a whole number from ${least} to ${most}, written out`,
+      [`its length must be known before anything is computed: \`${call.function}(40)\``],
     );
     return undefined;
   }
-  const unit = parseUnit('1');
-  if (unit === null) throw new Error('the unit table has no unit for plain numbers');
-  const type = { dimension: NUMBER, kind: 'plain' } as const;
-  const coordinates = Float64Array.from({ length: n }, (_, i) => i + 1);
-  const axis: Axis = { name: 'harmonic', coordinates, type, unit };
-  const known = inference.scope.axes.get('harmonic');
+  const unit = parseUnit(unitText);
+  if (unit === null) throw new Error(`the unit table lacks ${unitText}`);
+  const type = typeOfUnit(unit);
+  const axis: Axis = { name, coordinates: Float64Array.from({ length: n }, (_, i) => at(i, n)), type, unit };
+  const known = inference.scope.axes.get(name);
   if (known !== undefined && !sameAxis(known, axis)) {
     inference.report(
       'AXIS_CONFLICT',
       call.span,
-      `the axis \`harmonic\` has other points already: ${axisLength(known)}`,
-      ['all orders of one sheet are the same: use one range, or one `harmonics(n)`, and name it'],
+      `the axis \`${name}\` has other points already: ${axisLength(known)}`,
+      [`all ${words} of one sheet are the same: use one range, or one \`${call.function}(n)\`, and name it`],
     );
     return undefined;
   }
-  inference.scope.axes.set('harmonic', axis);
-  inference.calls.set(call, { call: 'count', axis: 'harmonic' });
-  return { type, axes: ['harmonic'] };
+  inference.scope.axes.set(name, axis);
+  inference.calls.set(call, { call: 'count', axis: name });
+  return { type, axes: [name] };
 }
 
 /** The axis that an argument names; undefined where it names none. */

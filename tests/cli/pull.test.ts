@@ -73,6 +73,21 @@ describe('a sheet that takes a value', () => {
   });
 });
 
+describe('compare', () => {
+  it('holds two revisions on the server against each other, and a file against one', async () => {
+    const { status, out } = await cli(['compare', 'T-1@A', 'T-1@B', '--format', 'json'], { env });
+    expect(status).toBe(0);
+    expect(JSON.parse(out)).toMatchObject({ antinode: 'comparison/1', inputs: [{ path: 'inputs/p' }] });
+    const same = await cli(['compare', 'T-1@B', 'source.yaml', '--format', 'json'], { env });
+    expect(JSON.parse(same.out)).toMatchObject({ inputs: [], results: [] });
+  });
+
+  it('takes a file of that name before a revision', async () => {
+    await write('T-1@A', source('150 psig'));
+    expect((await cli(['compare', 'T-1@A', 'source.yaml'])).status).toBe(0);
+  });
+});
+
 describe('pull', () => {
   it('keeps what the lock file holds besides', async () => {
     await cli(['pull', 'T-1@B'], { env });

@@ -99,6 +99,34 @@ describe('quantities over axes, by hand', () => {
   });
 });
 
+describe('crank angles', () => {
+  const text = sheetOf(
+    'sections:',
+    '  - title: S',
+    '    steps:',
+    '      theta: angles(8)',
+    '      x: 2 in*cos(theta) + 1 in*cos(2*theta)',
+    '      top: "max_over(x, \'angle\')"',
+    '      low: "at(x, \'angle\', 90 deg)"',
+    '    figures: [{ kind: wave, of: x }]',
+  );
+
+  it('go once round in equal steps from zero', () => {
+    const { quantities } = reportOf(evaluateText(text));
+    expect(quantities['theta']?.axes).toEqual([
+      { name: 'angle', values: [0, 45, 90, 135, 180, 225, 270, 315], unit: 'deg' },
+    ]);
+    // 2 + 1 at the dead centre; −1 a quarter turn on.
+    expect(round(quantities['top']?.value)).toBe(3);
+    expect(round(quantities['low']?.value)).toBe(-1);
+  });
+
+  it.each(['angles(3)', 'angles(8.5)', 'angles(4000)', 'angles(8) + angles(9)'])('%s is refused', (calc) => {
+    const { report } = evaluateText(text.replace('angles(8)', calc));
+    expect(report).toBeNull();
+  });
+});
+
 describe('checks over axes', () => {
   it('pass only if they pass everywhere, and name the governing point', () => {
     const text = steps({ F: 'p*A to lbf' }, '    checks:', '      - { that: F <= 4 kip, label: Force }');

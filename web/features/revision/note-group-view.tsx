@@ -15,6 +15,14 @@ export interface NoteGroupProps {
 export function NoteGroupView({ reference, group, actions, onCloseComposer }: NoteGroupProps) {
   return (
     <div className="flex flex-col gap-2">
+      {group.asks !== null && (
+        <p className="border-t-2 border-ochre bg-sheet px-3 py-2 text-[0.8125rem]">
+          <span className="font-semibold text-ochre-ink">
+            <span aria-hidden="true">△</span> not expected
+          </span>{' '}
+          {group.asks}
+        </p>
+      )}
       {group.remarks.map((remark) => (
         <RemarkCard key={remark.id} remark={remark} actions={actions} />
       ))}

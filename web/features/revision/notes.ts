@@ -8,6 +8,8 @@ export interface NoteGroup {
   readonly remarks: readonly Remark[];
   /** A remark is being written here. */
   readonly isComposing: boolean;
+  /** What the margin itself asks: a value lies outside of the range in which it would be believed. */
+  readonly asks: string | null;
 }
 
 /** The notes of the margin in the order of the report. Remarks on blocks that are gone come first: they still need an answer. */
@@ -22,8 +24,16 @@ export function noteGroups(
   return [...gone, ...blocks.keys()].flatMap((path) => {
     const own = byPath.get(path) ?? [];
     const isComposing = composing.has(path);
-    if (own.length === 0 && !isComposing) return [];
-    const label = blocks.get(path)?.label ?? `${path}, which this revision no longer has`;
-    return [{ path, label, remarks: own.toSorted((a, b) => a.time.localeCompare(b.time)), isComposing }];
+    const block = blocks.get(path);
+    const asks = block === undefined ? null : questionOf(block);
+    if (own.length === 0 && !isComposing && asks === null) return [];
+    const label = block?.label ?? `${path}, which this revision no longer has`;
+    return [{ path, label, remarks: own.toSorted((a, b) => a.time.localeCompare(b.time)), isComposing, asks }];
   });
+}
+
+function questionOf(block: Block): string | null {
+  if (!('expect' in block) || block.expect === undefined || block.expect.within) return null;
+  const { number, unit } = block.printed;
+  return `${number} ${unit}`.trim() + ` lies outside of ${block.expect.range}. Why?`;
 }
