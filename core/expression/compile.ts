@@ -23,8 +23,8 @@ export function compile(typed: TypedExpression, context: CompileContext): Progra
   return { stages: compiler.stages, temps: compiler.stages.length, result };
 }
 
-/** An equation of state costs some hundred sums. */
-const LIBRARY_COST = 50;
+/** An equation of state costs some thousand sums. */
+const LIBRARY_COST = 1000;
 
 /** Work of a program, in operations on single values. */
 export function workOf({ stages }: Program, cells: (axes: Shape) => number): number {

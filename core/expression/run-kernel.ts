@@ -198,7 +198,9 @@ class KernelRun {
   private explain(odd: boolean, out: Float64Array, start: number, n: number): void {
     if (!odd && !this.anyFlagged) return;
     for (let k = 0; k < n; k += 1) {
-      if (odd || this.flagged[k] === 1) out[start + k] = this.cell(start + k);
+      const isSuspect = odd || this.flagged[k] === 1;
+      if (isSuspect && this.findings.wantsMore()) out[start + k] = this.cell(start + k);
+      else if (!Number.isFinite(out[start + k])) out[start + k] = Number.NaN;
     }
     this.flagged.fill(0);
     this.anyFlagged = false;

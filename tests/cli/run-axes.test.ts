@@ -64,7 +64,7 @@ describe('run --format text over axes', () => {
     expect(out).toMatch(/Pulsation +x +10 % +± 5 % +Design basis\n/);
     expect(out).toContain('   Loss, loss  Design basis\n   b   h\n      mm\n   0   1\n   1   3\n');
     expect(out).toContain(
-      '   Forces\n           dp     F      A\n          psi   lbf   in^2\n   C01  60.00  1800  30.00\n   C02  50.00  1500  30.00\n',
+      '   Forces\n         dp     F     A\n        psi   lbf  in^2\n   C01   60  1800    30\n   C02   50  1500    30\n',
     );
     expect(out).toContain('   1. Wind loads\n');
     expect(out).toContain('   1. Handbook of pipes\n');
