@@ -121,6 +121,21 @@ function multiplyRight(r: Stretch, a: Stretch, b: number, n: number): void {
   for (; i < n; i += 1) rd[ro + i] = ad[ao + i]! * b;
 }
 
+/** a times one factor after another, rounded after each. */
+export function chain(r: Stretch, a: Stretch, factors: readonly number[], n: number): void {
+  const [first = 1, second = 1, third = 1, ...more] = factors;
+  const [rd, ro, ad, ao] = [r.data, r.from, a.data, a.from];
+  let i = 0;
+  for (; i + 3 < n; i += 4) {
+    rd[ro + i] = ad[ao + i]! * first * second * third;
+    rd[ro + i + 1] = ad[ao + i + 1]! * first * second * third;
+    rd[ro + i + 2] = ad[ao + i + 2]! * first * second * third;
+    rd[ro + i + 3] = ad[ao + i + 3]! * first * second * third;
+  }
+  for (; i < n; i += 1) rd[ro + i] = ad[ao + i]! * first * second * third;
+  if (more.length > 0) chain(r, r, more, n);
+}
+
 /** x - x is zero for every number that can be held, and NaN for the others. */
 export function isOdd(x: number): boolean {
   return x - x !== 0;

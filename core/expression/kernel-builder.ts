@@ -90,7 +90,10 @@ export class KernelBuilder {
     return this.push(`-${key(from)}`, [from], (number, to) => ({ op: 'negate', to, from: number(from) }));
   }
 
-  private binary({ operator, left, right, span }: Expression & { node: 'binary' }): Register {
+  private binary(expression: Expression & { node: 'binary' }): Register {
+    const { operator, left, right, span } = expression;
+    const chained = this.chain(expression);
+    if (chained !== null) return chained;
     const [a, b] = [this.value(left), this.value(right)];
     const reciprocal = operator === '/' && b.bank === 'constant' ? exactReciprocal(this.constants[b.index]) : null;
     if (reciprocal !== null) return this.times(a, reciprocal);
@@ -107,6 +110,38 @@ export class KernelBuilder {
       rightSpan: right.span,
       rightInputs: named.map(({ name, register }) => ({ name, register: number(register) })),
     }));
+  }
+
+  /** A varying value times two or more that do not vary: one pass over the cases in the place of many. */
+  private chain(expression: Expression & { node: 'binary' }): Register | null {
+    if (this.axes.length === 0) return null;
+    const factors: Register[] = [];
+    let base: Expression = expression;
+    for (let next = this.factorOf(base); next !== null; next = this.factorOf(base)) {
+      factors.unshift(next.factor);
+      ({ base } = next);
+    }
+    if (factors.length < 2) return null;
+    const from = this.value(base);
+    const { span } = expression;
+    return this.push(`${key(from)}*${factors.map(key).join('*')}`, [from, ...factors], (number, to) => ({
+      op: 'chain',
+      to,
+      from: number(from),
+      factors: factors.map(number),
+      span,
+    }));
+  }
+
+  /** The last factor of a product that does not vary, and what it is multiplied with. */
+  private factorOf(product: Expression): { readonly factor: Register; readonly base: Expression } | null {
+    if (product.node !== 'binary') return null;
+    const { operator, left, right } = product;
+    const varies = (part: Expression): boolean => this.compiler.axesOf(part).length > 0;
+    if (operator === '*' && varies(left) && !varies(right)) return { factor: this.value(right), base: left };
+    if (operator === '*' && varies(right) && !varies(left)) return { factor: this.value(left), base: right };
+    const divisor = operator === '/' && varies(left) ? exactReciprocal(constantValue(right)) : null;
+    return divisor === null ? null : { factor: this.constant(divisor), base: left };
   }
 
   /** A value times a number that is fixed when the program is compiled. */

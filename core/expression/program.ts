@@ -73,6 +73,8 @@ export type Instruction =
   | { readonly op: 'negate'; readonly to: number; readonly from: number }
   /** Cycles to radians or back, by a factor fixed when the program was compiled. */
   | { readonly op: 'scale'; readonly to: number; readonly from: number; readonly factor: number }
+  /** A value times one factor after another, each the same in all cases: `dp*pi/4*D^2`, in one go. */
+  | ChainInstruction
   | ChooseInstruction
   | MathInstruction
   | InterpolateInstruction
@@ -90,6 +92,14 @@ export interface ArithmeticInstruction {
   readonly rightSpan: Span;
   /** Names of the quantities read on the right-hand side, with their registers: of a divisor of zero, the ones to name. */
   readonly rightInputs: readonly { readonly name: string; readonly register: number }[];
+}
+
+export interface ChainInstruction {
+  readonly op: 'chain';
+  readonly to: number;
+  readonly from: number;
+  readonly factors: readonly number[];
+  readonly span: Span;
 }
 
 /** The value of one register or another, whichever a comparison of two more asks for. */

@@ -8,6 +8,7 @@ import { interpolateIn } from './lookup-table.ts';
 import { noticeDiagnostics, notFinite } from './notices.ts';
 import type {
   ArithmeticInstruction,
+  ChainInstruction,
   GasesArgument,
   Instruction,
   InterpolateInstruction,
@@ -39,6 +40,8 @@ function execute(instruction: Instruction, cell: Cell): number {
       return -at(registers, instruction.from);
     case 'scale':
       return at(registers, instruction.from) * instruction.factor;
+    case 'chain':
+      return multiplyChain(instruction, cell);
     case 'choose': {
       const { operator, left, right, yes, no } = instruction;
       const holds = compareNumbers(operator, at(registers, left), at(registers, right));
@@ -58,6 +61,14 @@ function execute(instruction: Instruction, cell: Cell): number {
     case '^':
       return calculate(instruction, cell);
   }
+}
+
+function multiplyChain({ from, factors, span }: ChainInstruction, { registers, diagnostics }: Cell): number {
+  const product = factors.reduce((value, factor) => value * at(registers, factor), at(registers, from));
+  const isKnown = [from, ...factors].every((register) => !Number.isNaN(at(registers, register)));
+  if (Number.isFinite(product) || !isKnown) return product;
+  diagnostics.push(notFinite(span));
+  return Number.NaN;
 }
 
 function calculate(instruction: ArithmeticInstruction, cell: Cell): number {

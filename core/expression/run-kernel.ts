@@ -139,6 +139,14 @@ class KernelRun {
       case 'scale':
         loops.scale(r, at(instruction.from), instruction.factor, n);
         return false;
+      case 'chain':
+        loops.chain(
+          r,
+          at(instruction.from),
+          instruction.factors.map((factor) => at(factor).data[0]!),
+          n,
+        );
+        return false;
       case 'choose': {
         const { left, right, yes, no } = instruction;
         return loops.choose(r, instruction.operator, [at(left), at(right), at(yes), at(no)], n);

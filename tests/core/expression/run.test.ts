@@ -5,6 +5,8 @@ import { compile } from '../../../core/expression/compile.ts';
 import { inferType } from '../../../core/expression/infer-type.ts';
 import type { Program } from '../../../core/expression/program.ts';
 import { run } from '../../../core/expression/run.ts';
+import { parseUnit } from '../../../core/units/parse-unit.ts';
+import { typeOfUnit } from '../../../core/units/unit.ts';
 import { parsed, evaluate, faultsOf, scopeWith, underlined } from './support.ts';
 import { SAMPLES } from './sample-functions.ts';
 
@@ -122,5 +124,50 @@ describe('programs', () => {
   it('may be a single quantity or a single number', () => {
     expect(result(programOf('n', ['n']), [7])).toBe(7);
     expect(result(programOf('2', []), [])).toBe(2);
+  });
+});
+
+describe('programs over an axis', () => {
+  const unit = parseUnit('Hz');
+  if (unit === null) throw new Error('no hertz');
+  const coordinates = Float64Array.from({ length: 1000 }, (_, i) => i - 2);
+  const axes = new Map([['speed', { name: 'speed', coordinates, type: typeOfUnit(unit), unit }]] as const);
+  const column = { axes: ['speed'] as const, data: coordinates };
+
+  function runOver(text: string, values: Readonly<Record<string, number>>) {
+    const names = ['n', ...Object.keys(values)];
+    const scope = scopeWith(SAMPLES, { shapes: new Map([['n', ['speed']]]), axes: new Map(axes) });
+    const typed = inferType(parsed(text), scope).value;
+    if (typed === undefined) throw new Error('no type');
+    const slots = new Map(names.map((name, slot) => [name, slot]));
+    const program = compile(typed, { slots, gases: new Map(), functions: new Map(), site: {} });
+    return { program, ...run(program, [column, ...Object.values(values).map(single)], axes) };
+  }
+
+  it('take what does not vary out of the loop, and products of it in one go', () => {
+    const { program, column: found } = runOver('n*pi/4*k^2*3', { k: 5 });
+    expect(program.stages.map(({ stage }) => stage)).toEqual(['kernel', 'kernel']);
+    const last = program.stages.at(-1);
+    expect(last?.stage === 'kernel' && last.kernel.instructions.map(({ op }) => op)).toEqual(['chain']);
+    expect(found.data[10]).toBe(8 * Math.PI * 0.25 * 25 * 3);
+  });
+
+  it('say once what is wrong at many points, and hide nothing behind a quotient', () => {
+    // n is zero at the third point only; 1e308·n cannot be held from n = 2 on, nor for n = −2.
+    expect(runOver('1/n', {}).diagnostics).toMatchObject([
+      { code: 'DIVISION_BY_ZERO', message: 'this divisor is zero (at 0 Hz)' },
+    ]);
+    const hidden = runOver('1/(1e308*n*k)', { k: 9 }).diagnostics;
+    expect(hidden.map(({ code }) => code).toSorted()).toEqual(['DIVISION_BY_ZERO', 'RESULT_NOT_FINITE']);
+    const quotient = runOver('1e308*n*9/k', { k: 3 });
+    expect(quotient.diagnostics).toMatchObject([{ code: 'RESULT_NOT_FINITE' }]);
+    expect(Number.isNaN(quotient.column.data[999])).toBe(true);
+    expect(quotient.column.data[2]).toBe(0);
+  });
+
+  it('leave what is not known unknown, without a word', () => {
+    const { column: found, diagnostics } = runOver('n*k + n', { k: Number.NaN });
+    expect(diagnostics).toEqual([]);
+    expect(found.data.every(Number.isNaN)).toBe(true);
   });
 });
