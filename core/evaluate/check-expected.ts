@@ -5,11 +5,11 @@ import { error, warning, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import type { SheetDocument, Text } from '../sheet/document.ts';
 import { fromSi, toSi } from '../units/convert.ts';
 import type { QuantityType } from '../units/dimension.ts';
-import { describeType, sameDimension } from '../units/dimensions.ts';
+import { article, describeType, sameDimension } from '../units/dimensions.ts';
 import { parseRange } from '../units/parse-range.ts';
 import { printNumber } from '../units/print.ts';
 import { missingFromSite, type Site } from '../units/site.ts';
-import { article } from '../units/type-algebra.ts';
+
 import type { Unit } from '../units/unit.ts';
 import { isSameKind } from './read-values.ts';
 

@@ -1,8 +1,9 @@
+import { article } from '../units/dimensions.ts';
 import type { AxisName } from '../axes/axis.ts';
 import { error, type Diagnostic } from '../diagnostics/diagnostic.ts';
 import { shapeOf } from '../expression/type-scope.ts';
 import type { FigureNode } from '../sheet/document.ts';
-import { article, compareTypes } from '../units/type-algebra.ts';
+import { compareTypes } from '../units/type-algebra.ts';
 import type { TypedFigure } from './check-types.ts';
 
 /** What each kind of figure runs along; a matrix takes any two axes, a line any one. */

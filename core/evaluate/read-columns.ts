@@ -5,10 +5,10 @@ import type { GasColumn } from '../expression/gas-column.ts';
 import type { GasModel } from '../gas/gas-model.ts';
 import type { EvaluatedColumn } from '../report/evaluated-sheet.ts';
 import type { ConditionColumnNode, SheetDocument, Text } from '../sheet/document.ts';
-import { describeType } from '../units/dimensions.ts';
+import { article, describeType } from '../units/dimensions.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 import { isRange } from '../units/parse-range.ts';
-import { article } from '../units/type-algebra.ts';
+
 import type { Site } from '../units/site.ts';
 import { unknownUnit } from '../units/unknown-unit.ts';
 import type { Overrides } from './overrides.ts';

@@ -6,11 +6,11 @@ import type { EvaluatedGas, Value } from '../report/evaluated-sheet.ts';
 import type { GasNode, InputNode, SheetDocument, Text } from '../sheet/document.ts';
 import { fromSi } from '../units/convert.ts';
 import type { QuantityType } from '../units/dimension.ts';
-import { describeType, isNumber, sameDimension } from '../units/dimensions.ts';
+import { article, describeType, isNumber, sameDimension } from '../units/dimensions.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
 import { printNumber } from '../units/print.ts';
 import type { Site } from '../units/site.ts';
-import { article } from '../units/type-algebra.ts';
+
 import { isSameKind, readValue } from './read-values.ts';
 
 /** One side of what is uncertain: what stands in the place of the stated value, and what it is in print. */

@@ -8,11 +8,11 @@ import { inSystem } from '../units/display.ts';
 import { parseQuantity } from '../units/parse-quantity.ts';
 import { isRange } from '../units/parse-range.ts';
 import type { QuantityType } from '../units/dimension.ts';
-import { describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
+import { article, describeType, PRESSURE, sameDimension } from '../units/dimensions.ts';
 import { missingState } from '../units/missing-state.ts';
 import { missingFromSite, NO_SITE, type Site } from '../units/site.ts';
 import { typeOfUnit } from '../units/unit.ts';
-import { article } from '../units/type-algebra.ts';
+
 import type { Overrides } from './overrides.ts';
 import type { Axes } from './read-axes.ts';
 

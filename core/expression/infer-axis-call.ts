@@ -11,10 +11,10 @@ import {
 import { unionShapes, withoutAxes } from '../axes/shape.ts';
 import { nearest } from '../diagnostics/nearest.ts';
 import { toSi } from '../units/convert.ts';
-import { sameDimension, describeType } from '../units/dimensions.ts';
+import { article, sameDimension, describeType } from '../units/dimensions.ts';
 import { parseUnit } from '../units/parse-unit.ts';
 import { typeOfUnit } from '../units/unit.ts';
-import { addTypes, article, compareTypes } from '../units/type-algebra.ts';
+import { addTypes, compareTypes } from '../units/type-algebra.ts';
 import { acceptType } from '../units/type-conversion.ts';
 import type { AxisFunction, Reduction } from './axis-functions.ts';
 import { constantValue } from './constant-value.ts';

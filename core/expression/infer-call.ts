@@ -3,7 +3,7 @@ import type { LibraryFunction, Parameter } from '../library/function.ts';
 import type { QuantityType } from '../units/dimension.ts';
 import { NUMBER } from '../units/dimensions.ts';
 import { acceptType } from '../units/type-conversion.ts';
-import type { TypeFault } from '../units/type-algebra.ts';
+import type { TypeFault } from '../units/type-faults.ts';
 import { AXIS_FUNCTIONS } from './axis-functions.ts';
 import { inferAxisCall } from './infer-axis-call.ts';
 import { checkCount, type TypedCall } from './typed-call.ts';

@@ -1,10 +1,9 @@
 import { SCALAR, unionShape, type Shape } from '../axes/shape.ts';
 import { error, type Diagnosed, type Diagnostic, type Span } from '../diagnostics/diagnostic.ts';
 import type { QuantityType } from '../units/dimension.ts';
-import { describeType, isNumber, NUMBER } from '../units/dimensions.ts';
+import { article, describeType, isNumber, NUMBER } from '../units/dimensions.ts';
 import {
   addTypes,
-  article,
   compareTypes,
   divideTypes,
   multiplyTypes,
@@ -12,9 +11,8 @@ import {
   powerType,
   subtractTypes,
   type Operand,
-  type TypeFault,
-  type TypeResult,
 } from '../units/type-algebra.ts';
+import type { TypeFault, TypeResult } from '../units/type-faults.ts';
 import { convertType } from '../units/type-conversion.ts';
 import { missingFromSite } from '../units/site.ts';
 import { missingState } from '../units/missing-state.ts';

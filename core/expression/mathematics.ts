@@ -2,8 +2,9 @@ import type { FunctionResult } from '../library/function.ts';
 import { acos, asin, atan, cos, exp, log, log10, sin, tan } from '../numeric/math.ts';
 import { amplitudeFactor, withAmplitude } from '../units/amplitude.ts';
 import type { Amplitude, QuantityType } from '../units/dimension.ts';
-import { describeType, isNumber, NUMBER } from '../units/dimensions.ts';
-import { article, compareTypes, squareRootType, type Operand, type TypeFault } from '../units/type-algebra.ts';
+import { article, describeType, isNumber, NUMBER } from '../units/dimensions.ts';
+import { compareTypes, squareRootType, type Operand } from '../units/type-algebra.ts';
+import type { TypeFault } from '../units/type-faults.ts';
 
 /** Type of a call, or what is wrong with the types of its arguments, and with which of them. */
 export type MathTyping =

@@ -1,5 +1,5 @@
 import type { Amplitude, QuantityType } from './dimension.ts';
-import type { TypeFault, TypeResult } from './type-algebra.ts';
+import type { TypeFault, TypeResult } from './type-faults.ts';
 
 /** Words behind a unit that say which amplitude it measures. */
 export const AMPLITUDE_WORDS: ReadonlyMap<string, Amplitude> = new Map([
@@ -8,6 +8,7 @@ export const AMPLITUDE_WORDS: ReadonlyMap<string, Amplitude> = new Map([
   ['rms', 'rms'],
 ]);
 
+/** The word behind a unit that says which amplitude it measures: `pk`, `pp` or `rms`. */
 export function amplitudeWord(amplitude: Amplitude): string {
   return amplitude === 'peak' ? 'pk' : amplitude === 'rms' ? 'rms' : 'pp';
 }
@@ -58,6 +59,7 @@ function differ(a: QuantityType, b: QuantityType): boolean {
   return a.amplitude !== undefined && b.amplitude !== undefined && a.amplitude !== b.amplitude;
 }
 
+/** What is wrong where two kinds of amplitude meet, and what turns one into the other. */
 export function amplitudesDiffer(a: Amplitude | undefined, b: Amplitude | undefined, verb: string): TypeFault {
   return {
     code: 'AMPLITUDES_DIFFER',

@@ -147,3 +147,8 @@ function inBaseUnits(dimension: Dimension): string {
 function power(symbol: string, exponent: number): string {
   return Math.abs(exponent - 1) < EXPONENT_TOLERANCE ? symbol : `${symbol}^${Number(exponent.toFixed(4))}`;
 }
+
+/** A noun with its article: `a force`, `an angle`. */
+export function article(noun: string): string {
+  return `${/^[aeiou]/.test(noun) ? 'an' : 'a'} ${noun}`;
+}

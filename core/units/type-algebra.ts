@@ -1,4 +1,3 @@
-import type { DiagnosticCode } from '../diagnostics/codes.ts';
 import type { Dimension, Kind, QuantityType } from './dimension.ts';
 import { alike, divided, multiplied } from './amplitude.ts';
 import {
@@ -14,14 +13,7 @@ import {
   TEMPERATURE,
 } from './dimensions.ts';
 
-/** Why two types do not go together, and what the engineer probably meant. */
-export interface TypeFault {
-  readonly code: DiagnosticCode;
-  readonly message: string;
-  readonly hints: readonly string[];
-}
-
-export type TypeResult = { readonly type: QuantityType } | { readonly fault: TypeFault };
+import { cyclesMeetRadians, levelMeetsDifference, levelSum, mismatch, type TypeResult } from './type-faults.ts';
 
 /** One side of an operation. */
 export interface Operand {
@@ -210,43 +202,6 @@ function commonType(a: Operand, b: Operand): TypeResult {
   return { type: computedType(left.dimension) };
 }
 
-function levelMeetsDifference({ dimension }: QuantityType): TypeFault {
-  const pressure = sameDimension(dimension, PRESSURE);
-  return {
-    code: 'UNIT_MISMATCH',
-    message: `a ${pressure ? 'pressure' : 'temperature'} level is compared with a ${pressure ? 'pressure' : 'temperature'} difference`,
-    hints: [
-      pressure
-        ? 'write psia or psig (bara, barg) for a pressure level, psi (bar) for a difference'
-        : 'write degF or degC for a temperature level, delta_degF or delta_degC for a difference',
-    ],
-  };
-}
-
-function levelSum({ dimension }: QuantityType): TypeFault {
-  const pressure = sameDimension(dimension, PRESSURE);
-  return {
-    code: 'LEVEL_SUM',
-    message: `two ${pressure ? 'pressure' : 'temperature'} levels are added`,
-    hints: [
-      pressure
-        ? 'add a difference: `psi`, `bar` or `kPa` without g or a; for their mean write mean(p_1, p_2)'
-        : 'add a difference: `delta_degC` or `delta_degF`; for their mean write mean(T_1, T_2)',
-    ],
-  };
-}
-
-function mismatch(verb: string, left: QuantityType, right: QuantityType): TypeResult {
-  return {
-    fault: {
-      code: 'UNIT_MISMATCH',
-      message: `${article(describeType(left))} and ${article(describeType(right))} are ${verb}`,
-      hints:
-        isNumber(left.dimension) || isNumber(right.dimension) ? ['give the bare number its unit, if it has one'] : [],
-    },
-  };
-}
-
 /** Sums and comparisons of rates and angles: like with like; a plain 1/s next to cycles counts as cycles. */
 function turningSum(verb: string, left: QuantityType, right: QuantityType): TypeResult {
   if (left.kind === right.kind) return { type: left };
@@ -255,14 +210,6 @@ function turningSum(verb: string, left: QuantityType, right: QuantityType): Type
   if (isNumber(left.dimension) && kinds.includes('radians') && kinds.includes('plain'))
     return ok(left.dimension, 'radians');
   return { fault: cyclesMeetRadians(verb) };
-}
-
-function cyclesMeetRadians(verb: string): TypeFault {
-  return {
-    code: 'CYCLES_AND_RADIANS',
-    message: `a rate in cycles and one in radians are ${verb}`,
-    hints: ['bring both to one: 2*pi times cycles are radians, radians over 2*pi are cycles'],
-  };
 }
 
 function productOfTurning(a: Kind, b: Kind): Kind | null {
@@ -294,9 +241,4 @@ function isRoot(exponent: number): boolean {
 
 function ok(dimension: Dimension, kind: Kind): TypeResult {
   return { type: { dimension, kind } };
-}
-
-/** A noun with its article: `a force`, `an angle`. */
-export function article(noun: string): string {
-  return `${/^[aeiou]/.test(noun) ? 'an' : 'a'} ${noun}`;
 }

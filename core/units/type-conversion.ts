@@ -1,7 +1,15 @@
 import type { Kind, QuantityType } from './dimension.ts';
-import { describeDimension, describeType, FREQUENCY, isNumber, PRESSURE, sameDimension } from './dimensions.ts';
+import {
+  article,
+  describeDimension,
+  describeType,
+  FREQUENCY,
+  isNumber,
+  PRESSURE,
+  sameDimension,
+} from './dimensions.ts';
 import { amplitudesDiffer, withAmplitude } from './amplitude.ts';
-import { article, type TypeFault } from './type-algebra.ts';
+import type { TypeFault } from './type-faults.ts';
 import type { Unit } from './unit.ts';
 
 /** A type seen as another one, and the factor that its SI number takes on the way (1, 2π or 1/2π). */

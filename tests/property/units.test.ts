@@ -7,14 +7,8 @@ import { displayUnit, inSystem } from '../../core/units/display.ts';
 import { parseQuantity } from '../../core/units/parse-quantity.ts';
 import { parseUnit } from '../../core/units/parse-unit.ts';
 import { ALL_UNITS } from '../../core/units/table.ts';
-import {
-  addTypes,
-  compareTypes,
-  divideTypes,
-  multiplyTypes,
-  subtractTypes,
-  type TypeResult,
-} from '../../core/units/type-algebra.ts';
+import { addTypes, compareTypes, divideTypes, multiplyTypes, subtractTypes } from '../../core/units/type-algebra.ts';
+import type { TypeResult } from '../../core/units/type-faults.ts';
 import type { Unit } from '../../core/units/unit.ts';
 
 const ATMOSPHERE = 95_837.122_6;

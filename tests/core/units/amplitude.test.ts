@@ -12,8 +12,8 @@ import {
   multiplyTypes,
   powerType,
   subtractTypes,
-  type TypeResult,
 } from '../../../core/units/type-algebra.ts';
+import type { TypeResult } from '../../../core/units/type-faults.ts';
 import { convertType } from '../../../core/units/type-conversion.ts';
 import { typeOfUnit, type Unit } from '../../../core/units/unit.ts';
 
